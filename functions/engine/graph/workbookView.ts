@@ -1,0 +1,30 @@
+import type { Area } from '../formula/value';
+import type { TableShape } from '../formula/evaluate';
+
+/** What a cell holds, as the sheet tells it. */
+export interface CellContent {
+  /** What the cell shows; undefined for a formula that has not been computed. */
+  readonly value: number | string | boolean | { readonly error: string } | undefined;
+  /** Formula in R1C1 form with its `=`; absent for a constant. */
+  readonly formula?: string;
+  /** True where a range in a scalar's place means the cell of the same row or column. */
+  readonly implicit?: boolean;
+  /** On the anchor of a spill or an array formula: its size. */
+  readonly array?: { readonly rows: number; readonly cols: number };
+  /** On every other cell of it: where the anchor stands. */
+  readonly partOf?: { readonly row: number; readonly col: number };
+  /** True where the formula may be hidden from the reader. */
+  readonly hidden?: boolean;
+}
+
+/** A workbook as far as it has been read. Sheets are counted from 0, rows and columns from 1. */
+export interface WorkbookView {
+  readonly sheets: readonly { readonly name: string; readonly rows: number; readonly cols: number }[];
+  /** The content of a cell: null if blank, undefined if it has not been read. */
+  cell(sheet: number, row: number, col: number): CellContent | null | undefined;
+  /** Asks for an area to be read before the next round. */
+  want(area: Area): void;
+  /** The formula (R1C1, relative to A1) of a name seen from a sheet. */
+  name(name: string, sheet: number): string | undefined;
+  table(name: string, sheet: number, row: number, col: number): TableShape | undefined;
+}

@@ -1,0 +1,17 @@
+import type { Declaration } from './declaration';
+import { carryFamily } from './families/carry';
+import { combinationFunctions } from './families/combination';
+import { coverageFunctions } from './families/coverage';
+import { proofFunctions } from './families/proof';
+import { roundingFunctions } from './families/rounding';
+import { standardUncertaintyFunctions } from './families/standardUncertainty';
+
+/** Every worksheet function: the single source of truth for metadata, argument checking, help and tables. */
+export const registry: readonly Declaration[] = [
+  ...standardUncertaintyFunctions,
+  ...combinationFunctions,
+  ...carryFamily,
+  ...roundingFunctions,
+  ...coverageFunctions,
+  ...proofFunctions,
+];

@@ -1,0 +1,24 @@
+/** A function in which another engine cannot be the judge, and why. */
+export interface Exception {
+  readonly engine: 'HyperFormula' | 'LibreOffice';
+  readonly name: string;
+  /** `missing`: the engine does not have it. `differs`: the engine is wrong, or answers another question. */
+  readonly how: 'missing' | 'differs';
+  readonly why: string;
+}
+
+/** Each is checked to be true still; a function may be excepted for one engine only, so the other one judges it. */
+export const exceptions: readonly Exception[] = [
+  { engine: 'HyperFormula', name: 'INTERCEPT', how: 'missing', why: 'not among its functions' },
+  { engine: 'HyperFormula', name: 'FORECAST', how: 'missing', why: 'not among its functions' },
+  { engine: 'HyperFormula', name: 'FORECAST.LINEAR', how: 'missing', why: 'not among its functions' },
+  { engine: 'HyperFormula', name: 'LINEST', how: 'missing', why: 'not among its functions' },
+  {
+    engine: 'HyperFormula', name: 'ACOT', how: 'differs',
+    why: 'gives the angle between -π/2 and π/2 for negative arguments; the documentation of Excel says between 0 and π',
+  },
+  {
+    engine: 'HyperFormula', name: 'INT', how: 'differs',
+    why: 'cuts off towards 0, where the documentation of Excel has INT(-8.9) = -9',
+  },
+];
