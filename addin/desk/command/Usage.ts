@@ -1,0 +1,41 @@
+/** A command used wrongly; the message says what is needed. */
+export class UsageError extends Error {
+  override name = 'UsageError';
+}
+
+export const USAGE = `rootsum: worksheet functions for measurement uncertainty, without Excel
+
+  rootsum recalc BOOK.xlsx --out NEW.xlsx         compute a workbook and write it as a new file
+  rootsum apply PLAN.json BOOK.xlsx... --out-dir DIR
+                                                  add the columns of a plan to workbooks
+  rootsum functions [--json]                      list the functions
+
+  rootsum COMMAND --help                          more about one command
+
+No workbook that is given is ever changed. Exit status: 0; 1 when a cell, a column or a workbook was
+refused (each is named, the rest is done); 2 for wrong usage.`;
+
+export const RECALC_HELP = `rootsum recalc BOOK.xlsx --out NEW.xlsx
+
+Computes the formulas without a stored result, every ROOTSUM function, and all cells that depend on
+them. Every other cell keeps its stored result. Only what changed is written; charts, styles, names
+and all else stay as they are. Cells that cannot be computed are named, and their old results removed.
+
+  --out NEW.xlsx    the file to write; it may not be BOOK.xlsx itself
+  --help            this text`;
+
+export const APPLY_HELP = `rootsum apply PLAN.json BOOK.xlsx... --out-dir DIR
+
+Adds the columns that a plan lists to each workbook, computes them, and writes each workbook under its
+own name into DIR. A column whose place is taken is refused; one that is there already is left alone.
+The schema of a plan is addin/desk/command/plan.schema.json.
+
+  --out-dir DIR     the folder for the new files; made if it does not exist
+  --help            this text`;
+
+export const FUNCTIONS_HELP = `rootsum functions [--json]
+
+Lists the functions with their arguments.
+
+  --json            the metadata as Excel reads it (functions.json)
+  --help            this text`;

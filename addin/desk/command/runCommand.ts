@@ -1,0 +1,29 @@
+import { applyCommand } from './applyCommand';
+import type { Command, Surroundings } from './Command';
+import { functionsCommand } from './functionsCommand';
+import { recalcCommand } from './recalcCommand';
+import { reportCommand } from './reportCommand';
+import { USAGE, UsageError } from './Usage';
+
+/** `report` is what `npm start` runs; it is not listed. */
+const COMMANDS: Readonly<Record<string, Command>> = {
+  recalc: recalcCommand, apply: applyCommand, functions: functionsCommand, report: reportCommand,
+};
+
+/** Runs a command line. @returns 0; 1 if something was refused; 2 for wrong usage. */
+export async function runCommand(args: readonly string[], surroundings: Surroundings): Promise<number> {
+  const { terminal } = surroundings;
+  const [name, ...rest] = args;
+  try {
+    if (name === '--help' || name === '-h' || name === 'help') return terminal.out(USAGE), 0;
+    if (name === undefined || !Object.hasOwn(COMMANDS, name)) {
+      throw new UsageError(name === undefined ? 'a command is needed: recalc, apply or functions' : `there is no command ${name}: use recalc, apply or functions`);
+    }
+    return await COMMANDS[name](rest, surroundings);
+  } catch (problem) {
+    if (!(problem instanceof UsageError)) throw problem;
+    terminal.err(`rootsum: ${problem.message}`);
+    terminal.err(Object.hasOwn(COMMANDS, name ?? '') ? `See rootsum ${name} --help` : 'See rootsum --help');
+    return 2;
+  }
+}

@@ -1,0 +1,112 @@
+import { cellName } from '../book/area';
+import type { Desk } from './Desk';
+import { storedFormula } from './functionNames';
+import { headersOf } from './Plan';
+import type { Plan, PlanColumn } from './Plan';
+import { PlanRefusal, planTarget } from './planTarget';
+import type { PlanTarget } from './planTarget';
+import type { Progress, Recalculation } from './recalculate';
+import { sharedFormula } from '../book/sharedFormula';
+import { showValue } from './values';
+
+/** What became of one entry of a plan. */
+export interface EntryOutcome {
+  readonly entry: PlanColumn;
+  /** Place in the plan, from 1. */
+  readonly number: number;
+  readonly state: 'added' | 'already there' | 'refused';
+  /** Why it was refused. */
+  readonly message?: string;
+  readonly target?: PlanTarget;
+}
+
+export interface PlanOutcome {
+  readonly entries: readonly EntryOutcome[];
+  readonly recalculation: Recalculation;
+}
+
+/**
+ * Adds the columns of a plan to an open workbook and recalculates it. An entry whose place is taken is refused; one that is there already,
+ * formula by formula, is left as it is.
+ */
+export async function applyPlan(desk: Desk, plan: Plan, progress?: Progress): Promise<PlanOutcome> {
+  const entries: EntryOutcome[] = [];
+  for (const [i, entry] of plan.columns.entries()) entries.push({ entry, number: i + 1, ...(await applyEntry(desk, entry)) });
+  return { entries, recalculation: await desk.recalculate(progress) };
+}
+
+async function applyEntry(desk: Desk, entry: PlanColumn): Promise<Pick<EntryOutcome, 'state' | 'message' | 'target'>> {
+  try {
+    const formula = storedOf(desk, entry);
+    const target = await planTarget(desk, entry);
+    const spills = entry.mode === 'spill' || headersOf(entry).length > 1 || desk.needsArray(formula);
+    if (isThere(desk, entry, target, formula, spills)) return { state: 'already there', target };
+    checkFree(desk, entry, target);
+    write(desk, entry, target, formula, spills);
+    return { state: 'added', target };
+  } catch (problem) {
+    if (problem instanceof PlanRefusal) return { state: 'refused', message: problem.message };
+    throw problem;
+  }
+}
+
+function storedOf(desk: Desk, entry: PlanColumn): string {
+  try {
+    return storedFormula(entry.formula, desk.names);
+  } catch (problem) {
+    throw new PlanRefusal(`the formula ${(problem as Error).message}`);
+  }
+}
+
+/** The formula of each row that has one. */
+function* formulasOf(entry: PlanColumn, { first, last, left }: PlanTarget, formula: string): Generator<[row: number, formula: string]> {
+  if (entry.mode === 'spill') return yield [first, formula];
+  const moved = sharedFormula(formula, first, left);
+  for (let row = first; row <= last; row++) yield [row, moved(row, left)];
+}
+
+function isThere({ working }: Desk, entry: PlanColumn, target: PlanTarget, formula: string, spills: boolean): boolean {
+  const { sheet, headerRow, left } = target;
+  if (!headersOf(entry).every((header, i) => working.cell(sheet, headerRow, left + i)?.value === header)) return false;
+  for (const [row, wanted] of formulasOf(entry, target, formula)) {
+    const cell = working.cell(sheet, row, left);
+    if (cell?.formula !== wanted || (cell.array !== undefined) !== spills) return false;
+  }
+  return true;
+}
+
+function checkFree({ working }: Desk, entry: PlanColumn, { sheet, headerRow, left, first, last }: PlanTarget): void {
+  const right = left + headersOf(entry).length - 1;
+  const rows = [headerRow, ...Array.from({ length: last - first + 1 }, (_, i) => first + i)];
+  for (const row of rows) {
+    for (let col = left; col <= right; col++) {
+      const cell = working.cell(sheet, row, col);
+      if (cell) throw new PlanRefusal(`${cellName(row, col)} is occupied (it holds ${cell.formula === undefined ? showValue(cell.value) : `=${cell.formula.slice(0, 60)}`})`);
+    }
+  }
+  const merge = working.book.source.data[sheet]?.merges.find((area) => area.top <= last && area.bottom >= headerRow && area.left <= right && area.right >= left);
+  if (merge) throw new PlanRefusal(`${cellName(merge.top, merge.left)} is a merged cell`);
+}
+
+function write({ working }: Desk, entry: PlanColumn, target: PlanTarget, formula: string, spills: boolean): void {
+  const { sheet, headerRow, left, first, last } = target;
+  const headers = headersOf(entry);
+  const neighbour = left > 1 && working.stored(sheet, headerRow, left - 1) ? { like: { row: headerRow, col: left - 1 } } : undefined;
+  headers.forEach((header, i) => working.setConstant(sheet, headerRow, left + i, header, neighbour));
+  const rows = entry.mode === 'spill' ? last - first + 1 : 1;
+  for (const [row, text] of formulasOf(entry, target, formula)) {
+    working.setFormula(sheet, row, left, text, spills ? { spill: { rows, cols: headers.length } } : {});
+  }
+  setFormats(entry, target, working);
+}
+
+function setFormats(entry: PlanColumn, { sheet, left, first, last }: PlanTarget, working: Desk['working']): void {
+  const { numberFormat } = entry;
+  if (numberFormat === undefined) return;
+  headersOf(entry).forEach((_, i) => {
+    const format = typeof numberFormat === 'string' ? numberFormat : numberFormat[i];
+    for (let row = first; format !== undefined && row <= last; row++) {
+      if (working.book.numberFormat(working.book.styleAt(sheet, row, left + i)) !== format) working.setStyle(sheet, row, left + i, { numberFormat: format });
+    }
+  });
+}
