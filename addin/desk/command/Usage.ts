@@ -22,6 +22,7 @@ them. Every other cell keeps its stored result. Only what changed is written; ch
 and all else stay as they are. Cells that cannot be computed are named, and their old results removed.
 
   --out NEW.xlsx    the file to write; it may not be BOOK.xlsx itself
+  --values          write the library's results as plain values, for readers without the add-in
   --help            this text`;
 
 export const APPLY_HELP = `rootsum apply PLAN.json BOOK.xlsx... --out-dir DIR
@@ -31,6 +32,7 @@ own name into DIR. A column whose place is taken is refused; one that is there a
 The schema of a plan is addin/desk/command/plan.schema.json.
 
   --out-dir DIR     the folder for the new files; made if it does not exist
+  --values          write the library's results as plain values, for readers without the add-in
   --help            this text`;
 
 export const FUNCTIONS_HELP = `rootsum functions [--json]

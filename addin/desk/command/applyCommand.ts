@@ -16,7 +16,7 @@ import { APPLY_HELP, UsageError } from './Usage';
 
 /** `rootsum apply PLAN BOOK… --out-dir DIR` */
 export const applyCommand: Command = async (args, { terminal, folder }) => {
-  const { values, positionals } = readArguments(args, { 'out-dir': { type: 'string' } });
+  const { values, positionals } = readArguments(args, { 'out-dir': { type: 'string' }, values: { type: 'boolean' } });
   if (values.help) return terminal.out(APPLY_HELP), 0;
   const [planPath, ...books] = positionals;
   if (planPath === undefined || books.length === 0) throw new UsageError('apply needs a plan and at least one workbook');
@@ -34,7 +34,7 @@ export const applyCommand: Command = async (args, { terminal, folder }) => {
       if (books.some((book) => isSameFile(book, out))) throw new Refused(`${out} is a workbook that was given, which is never changed`);
       const other = written.get(out.toLowerCase());
       if (other !== undefined) throw new Refused(`${other} has the same name and was written to ${out}`);
-      const outcome = await applyTo(path, out, plan, bundle);
+      const outcome = await applyTo(path, out, plan, bundle, values.values === true);
       written.set(out.toLowerCase(), path);
       for (const line of problemLines(outcome, `${path}: `)) terminal.err(line);
       if (hasRefusals(outcome)) partly++;
@@ -65,11 +65,11 @@ export function planFile(path: string): Plan {
   }
 }
 
-async function applyTo(path: string, out: string, plan: Plan, bundle: FunctionBundle): Promise<PlanOutcome> {
+async function applyTo(path: string, out: string, plan: Plan, bundle: FunctionBundle, values: boolean): Promise<PlanOutcome> {
   const desk = openDesk(path, bundle);
   checkExtension(desk.working.book, out);
   const outcome = await applyPlan(desk, plan);
-  saveFile(out, desk.write());
+  saveFile(out, desk.write(values));
   return outcome;
 }
 

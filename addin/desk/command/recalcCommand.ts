@@ -9,7 +9,7 @@ import type { Command } from './Command';
 
 /** `rootsum recalc BOOK --out NEW` */
 export const recalcCommand: Command = async (args, { terminal, folder }) => {
-  const { values, positionals } = readArguments(args, { out: { type: 'string' } });
+  const { values, positionals } = readArguments(args, { out: { type: 'string' }, values: { type: 'boolean' } });
   if (values.help) return terminal.out(RECALC_HELP), 0;
   const [path, ...more] = positionals;
   if (path === undefined || more.length > 0) throw new UsageError(`recalc needs one workbook, got ${positionals.length}`);
@@ -22,7 +22,7 @@ export const recalcCommand: Command = async (args, { terminal, folder }) => {
     checkExtension(desk.working.book, out);
     const outcome = await desk.recalculate((done, of) => terminal.progress(progressBar(done, of, 'cells')));
     terminal.progress('');
-    saveFile(out, desk.write());
+    saveFile(out, desk.write(values.values === true));
     for (const line of refusalLines(outcome.refused)) terminal.err(line);
     terminal.out(`${out}: ${outcome.computed} cells computed, ${outcome.refused.length} refused`);
     return outcome.refused.length > 0 ? 1 : 0;

@@ -38,6 +38,8 @@ export const reportCommand: Command = async (args, { terminal, folder }) => {
     const outcome = await applyPlan(desk, plan, (done, of) => terminal.progress(progressBar(done, of, 'cells')));
     terminal.progress('');
     saveFile(out, desk.write());
+    const forReading = out.replace(/(\.[^.]*)$/, '-values$1');
+    if (path === undefined) saveFile(forReading, desk.write(true));
     for (const line of reportLines(desk.working, outcome.entries)) terminal.out(line);
     terminal.out('');
     const problems = problemLines(outcome);
@@ -45,7 +47,10 @@ export const reportCommand: Command = async (args, { terminal, folder }) => {
     if (problems.length > PROBLEMS_SHOWN) terminal.err(`… and ${problems.length - PROBLEMS_SHOWN} more: rootsum apply names them all`);
     terminal.out(`${plan.title ?? 'Plan'}: ${summary(outcome)}`);
     terminal.out(`The workbook with the new columns: ${out}`);
-    if (path === undefined) terminal.out(`The workbook without them: ${join(outDir, DEMO_BEFORE)}`);
+    if (path === undefined) {
+      terminal.out(`The same with plain values, for readers without the add-in: ${forReading}`);
+      terminal.out(`The workbook without them: ${join(outDir, DEMO_BEFORE)}`);
+    }
     return hasRefusals(outcome) ? 1 : 0;
   } catch (problem) {
     const reason = reasonOf(problem);

@@ -11,6 +11,7 @@ import { FunctionNames } from './functionNames';
 import { needsArray } from './needsArray';
 import { Recalculator } from './recalculate';
 import type { Progress, Recalculation } from './recalculate';
+import { valueEdits } from './valueEdits';
 import { WorkingBook } from './WorkingBook';
 
 /** The built functions: what Excel loads. */
@@ -51,8 +52,13 @@ export class Desk {
     return outcome;
   }
 
-  /** The file with what changed written into it. Where results were left open, whoever opens the file is asked to calculate. */
-  write(): Uint8Array {
-    return writeBook(this.working.book, bookEdits(this.working), { recalculate: this.leftOpen });
+  /**
+   * The file with what changed written into it. Where results were left open, whoever opens the file is asked to calculate.
+   *
+   * @param values   True for a copy in which the library's results are plain values, for readers without the add-in.
+   */
+  write(values = false): Uint8Array {
+    const edits = values ? valueEdits(this.working) : bookEdits(this.working);
+    return writeBook(this.working.book, edits, { recalculate: this.leftOpen && !values });
   }
 }
