@@ -39,7 +39,8 @@ export function readPlan(text: string): Plan {
   const uneven = given.columns.flatMap((column, i) => {
     const { numberFormat } = column;
     const count = headersOf(column).length;
-    if (!Array.isArray(numberFormat) || numberFormat.length === count) return [];
+    const titlesTable = typeof column.header === 'string' && column.mode === 'spill'; // one heading over a spilled table
+    if (!Array.isArray(numberFormat) || numberFormat.length === count || titlesTable) return [];
     return [`${entryName(given, i)}: numberFormat needs as many formats as there are headings, ${count}, got ${numberFormat.length}`];
   });
   if (uneven.length > 0) throw new PlanProblem(uneven);

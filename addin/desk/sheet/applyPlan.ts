@@ -91,7 +91,7 @@ function checkFree({ working }: Desk, entry: PlanColumn, { sheet, headerRow, lef
 function write({ working }: Desk, entry: PlanColumn, target: PlanTarget, formula: string, spills: boolean): void {
   const { sheet, headerRow, left, first, last } = target;
   const headers = headersOf(entry);
-  const neighbour = left > 1 && working.stored(sheet, headerRow, left - 1) ? { like: { row: headerRow, col: left - 1 } } : undefined;
+  const neighbour = headingBeside(working, target);
   headers.forEach((header, i) => working.setConstant(sheet, headerRow, left + i, header, neighbour));
   const rows = entry.mode === 'spill' ? last - first + 1 : 1;
   for (const [row, text] of formulasOf(entry, target, formula)) {
@@ -100,11 +100,19 @@ function write({ working }: Desk, entry: PlanColumn, target: PlanTarget, formula
   setFormats(entry, target, working);
 }
 
+/** The style of the nearest heading to the left, be there a spacer column between. */
+function headingBeside(working: Desk['working'], { sheet, headerRow, left }: PlanTarget): { like: { row: number; col: number } } | undefined {
+  for (let col = left - 1; col >= Math.max(1, left - 3); col--) {
+    if (typeof working.stored(sheet, headerRow, col)?.value === 'string') return { like: { row: headerRow, col } };
+  }
+  return undefined;
+}
+
 function setFormats(entry: PlanColumn, { sheet, left, first, last }: PlanTarget, working: Desk['working']): void {
   const { numberFormat } = entry;
   if (numberFormat === undefined) return;
-  headersOf(entry).forEach((_, i) => {
-    const format = typeof numberFormat === 'string' ? numberFormat : numberFormat[i];
+  const columns = typeof numberFormat === 'string' ? headersOf(entry).map(() => numberFormat) : numberFormat;
+  columns.forEach((format, i) => {
     for (let row = first; format !== undefined && row <= last; row++) {
       if (working.book.numberFormat(working.book.styleAt(sheet, row, left + i)) !== format) working.setStyle(sheet, row, left + i, { numberFormat: format });
     }

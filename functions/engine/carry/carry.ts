@@ -232,6 +232,7 @@ export class Carry {
       }
     }
     return [...bySource].map(([source, parts]) => {
+      parts.sort((a, b) => a.input - b.input); // as the user gave them
       const gross = parts.reduce((s, p) => s + Math.abs(p.sensitivity * p.u), 0);
       const component = parts.reduce((s, p) => s + p.sensitivity * p.u, 0);
       return { source, component: Math.abs(component) <= ROUNDING * gross && parts.length > 1 ? 0 : component, gross, parts };

@@ -19,7 +19,7 @@ export interface Evidence {
 /** One independent, unit-variance cause of doubt. */
 export interface Source {
   readonly id: number;
-  /** The tag that makes inputs share it; empty if it is one input's own. */
+  /** The tag that makes inputs share it, as it was first written; empty if it is one input's own. */
   readonly tag: string;
   readonly dof: number;
   readonly shape: Shape;
@@ -69,10 +69,10 @@ export class SourceTable {
   }
 
   private taggedSource(tag: string, evidence: Evidence, evaluation: number): number {
-    const known = this.tagged.get(tag);
+    const known = this.tagged.get(tag.toLowerCase());
     if (known === undefined) {
       const id = this.create(tag, evidence, evaluation);
-      this.tagged.set(tag, id);
+      this.tagged.set(tag.toLowerCase(), id);
       return id;
     }
     const source = this.sources[known];

@@ -4,7 +4,7 @@ import { EngineError } from '../EngineError';
 export type Tags = { readonly k: 'none' } | { readonly k: 'each' } | { readonly k: 'shared'; readonly weights: readonly Weight[] };
 
 export interface Weight {
-  /** Name of the tag, without outer blanks, in lower case. */
+  /** Name of the tag as written, without outer blanks; two that differ in case only are the same. */
   readonly tag: string;
   /** Share of the standard uncertainty in this source, in [-1, 1], not 0. */
   readonly weight: number;
@@ -16,15 +16,15 @@ export interface Weight {
  * @throws EngineError "text" if a weight cannot be read or a tag stands twice; "domain" if the squares of the weights sum to more than 1.
  */
 export function readTags(text: string): Tags {
-  const trimmed = text.trim().toLowerCase();
+  const trimmed = text.trim();
   if (trimmed === '') return { k: 'none' };
-  if (trimmed === 'each') return { k: 'each' };
+  if (trimmed.toLowerCase() === 'each') return { k: 'each' };
   const weights = trimmed
     .split(';')
     .map((part) => part.trim())
     .filter((part) => part !== '')
     .map((part) => readWeight(part, text));
-  const names = new Set(weights.map((w) => w.tag));
+  const names = new Set(weights.map((w) => w.tag.toLowerCase()));
   if (names.size !== weights.length) throw new EngineError('text', `a tag stands twice in "${text.trim()}"`);
   const sum = weights.reduce((s, w) => s + w.weight ** 2, 0);
   if (sum > 1 + 1e-9) throw new EngineError('domain', `the squares of the weights in "${text.trim()}" need to sum to at most 1, got ${sum}`);

@@ -48,7 +48,8 @@ describe('readPlan', () => {
     [{ header: undefined }, `${ENTRY}: header is missing: needs a heading, or a list of headings`],
     [{ colour: 'red' }, `${ENTRY}: colour is not a property of a column; it may have sheet, anchor, header, formula, mode, rows, numberFormat`],
     [{ numberFormat: 3 }, `${ENTRY}: numberFormat needs a number format such as "0.000", or a list of them, got 3`],
-    [{ numberFormat: ['0', '0.0'] }, `${ENTRY}: numberFormat needs as many formats as there are headings, 1, got 2`],
+    [{ mode: 'perRow', numberFormat: ['0', '0.0'] }, `${ENTRY}: numberFormat needs as many formats as there are headings, 1, got 2`],
+    [{ header: ['a', 'b', 'c'], numberFormat: ['0', '0.0'] }, `${ENTRY}: numberFormat needs as many formats as there are headings, 3, got 2`],
   ])('%j: %s', (change, message) => expect(ofColumn(change)).toEqual([message]));
 
   it('names every problem, not the first alone', () => {

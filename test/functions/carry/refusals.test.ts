@@ -133,6 +133,21 @@ describe('UNC_REPORT and UNC_BUDGET', () => {
   });
 });
 
+describe('labels in a budget', () => {
+  const port = memoryPort({
+    S: {
+      A1: 'Item', B1: 'Symbol', C1: 'Value', A2: 'Flask volume', B2: 'Vf', C2: 250, A3: 'Aliquot volume', B3: 'Va', C3: 25, C4: '=C2/C3',
+      E1: 'Reading', E2: 1, E3: 2, E5: '=SUM(E2:E3)',
+    },
+  });
+  it('are the text beside a form cell, not its symbol, and the heading of a column', async () => {
+    const form = await callOn(port, 'UNC_BUDGET', ['S!C4', { literal: 2 }], ['S!C2', { literal: 0.1 }, 'S!C3', { literal: 0.02 }]);
+    expect(form.slice(1, 3).map((r) => r[0])).toEqual(['Aliquot volume', 'Flask volume']);
+    const column = await callOn(port, 'UNC_BUDGET', ['S!E5', { literal: 2 }], ['S!E2:E3', { literal: [[0.1, '', '', 'Scale']] }]);
+    expect(column[1].slice(0, 2)).toEqual(['Scale: Reading', 'E2, E3']);
+  });
+});
+
 describe('calls at the same time', () => {
   it('share one reading of the workbook', async () => {
     const port = memoryPort({ S: sheet });

@@ -81,7 +81,7 @@ describe('UNC_COMBINE', () => {
     expect(await refused([3, 0])).toBe('#VALUE! UNC_COMBINE: evidence: u is 0; write exact where there is no doubt in row 2');
     expect(await refused([[3, 9], [null, 9]])).toMatch(/evidence: u is blank; write exact/);
     expect(await refused([[1, 9, null, 'T'], [1, 8, null, 'T']])).toBe(
-      '#VALUE! UNC_COMBINE: evidence: tag "t" is used with 9 and with 8 degrees of freedom in row 2, column 1',
+      '#VALUE! UNC_COMBINE: evidence: tag "T" is used with 9 and with 8 degrees of freedom in row 2, column 1',
     );
     expect(await refused([[1, null, null, 'T'], [2, null, null, null]], undefined, [[1, 0], [0, 1]])).toMatch(/correlations cannot be given together with tags/);
     expect(await refused([[1, 1, 1, 1, 1, 1]])).toBe('#VALUE! UNC_COMBINE: evidence must have 1 to 5 columns, got 1 × 6');
