@@ -1,3 +1,4 @@
+import { columnLetters } from './engine/graph/address';
 import type { PortArea } from './workbook';
 
 /** Size of a worksheet. */
@@ -23,13 +24,6 @@ export function parseAddress(address: string): PortArea | undefined {
   const [r1, r2] = first.kind === 'cols' ? [1, sheetRows] : ordered(first.row, last.row);
   const [c1, c2] = first.kind === 'rows' ? [1, sheetCols] : ordered(first.col, last.col);
   return { sheet, row: r1, col: c1, rows: r2 - r1 + 1, cols: c2 - c1 + 1 };
-}
-
-/** The letters of a column, 1 for A. */
-export function columnLetters(col: number): string {
-  let letters = '';
-  for (let rest = col; rest > 0; rest = Math.floor((rest - 1) / 26)) letters = String.fromCharCode(65 + ((rest - 1) % 26)) + letters;
-  return letters;
 }
 
 /** `E7` for a cell of an area, counted from its upper left one with 0. */

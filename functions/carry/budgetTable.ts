@@ -7,7 +7,8 @@ import { takenAsExact } from './exactCells';
 import { labelOf } from './labelOf';
 import { notesOn, shortList } from './notes';
 import type { CarryCall } from './readCarryCall';
-import { dofCell, statement } from './statement';
+import { dofCell } from '../dofCell';
+import { statement } from './statement';
 
 const HEADINGS = [
   'Source', 'Cells', 'Standard uncertainty u', 'Sensitivity coefficient c', 'Component |c| u', 'Degrees of freedom',

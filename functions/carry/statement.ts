@@ -1,6 +1,4 @@
-import type { CellResult } from '../cells';
 import { coverageFor } from '../engine/coverage/coverageFor';
-import { snapDof } from '../engine/coverage/truncateDof';
 import type { Carried } from '../engine/carry/carry';
 import { pairText } from '../engine/report/pairText';
 
@@ -22,6 +20,3 @@ export function statement(result: Carried, coverage: number | undefined, decimal
   const text = result.u > 0 ? pairText(result.estimate, result.u, { k, decimalSeparator }) : `${result.estimate} exactly`;
   return { k, p, nuUsed, expanded, text };
 }
-
-/** Degrees of freedom as a cell: a number, or `inf`. */
-export const dofCell = (dof: number): CellResult => (dof === Infinity ? 'inf' : snapDof(dof));

@@ -4,7 +4,8 @@ import { takenAsExact } from '../carry/exactCells';
 import { notesOn } from '../carry/notes';
 import { onlyOutcome, outcomes } from '../carry/outcomes';
 import { readCarryCall } from '../carry/readCarryCall';
-import { dofCell, statement } from '../carry/statement';
+import { dofCell } from '../dofCell';
+import { statement } from '../carry/statement';
 import { type Declaration, whole } from '../declaration';
 import { oneNumber, reference, repeatingReference } from '../parameters';
 

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest';
-import { cellName, columnLetters, parseAddress } from '../../functions/address';
+import { cellName, parseAddress } from '../../functions/address';
+import { columnLetters } from '../../functions/engine/graph/address';
 
 test('parseAddress reads the forms that the host writes', () => {
   expect(parseAddress('Sheet1!A1:B2')).toEqual({ sheet: 'Sheet1', row: 1, col: 1, rows: 2, cols: 2 });

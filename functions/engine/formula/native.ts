@@ -66,7 +66,7 @@ export function scalarFunction(
   };
 }
 
-/** A function that looks at whole ranges. Arguments arrive as they are; use the helpers of `ranges` to read them. */
+/** A function that looks at whole ranges. Arguments arrive as they are; use the functions of `ranges` to read them. */
 export function rangeFunction(
   name: string,
   kinds: readonly ParameterKind[],

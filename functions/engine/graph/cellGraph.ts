@@ -399,7 +399,7 @@ export class CellGraph implements Cells {
     const id = this.nodeFor(place, value, slopes, undefined);
     if (!content || (content.formula === undefined && !content.partOf) || this.options.compare === false) return;
     if (content.value === undefined) this.unchecked.add(id);
-    const words = disagreement(value, content.value, this.nodes, id);
+    const words = disagreement(value, content.value, () => this.nodes.turnover(id));
     if (words) this.nodes.refusal[id] = { message: `cell ${this.placeName(place)} ${words}` };
   }
 
@@ -432,7 +432,8 @@ const MOST_KEPT = 4e6;
 
 const areaKey = (a: Area): string => `${a.sheet}!${a.r1},${a.c1},${a.r2},${a.c2}`;
 
-function constant(value: CellContent['value']): Scalar {
+/** A stored value as a scalar; what has not been computed is #VALUE!. */
+export function constant(value: CellContent['value']): Scalar {
   switch (typeof value) {
     case 'number':
       return num(value);

@@ -1,19 +1,19 @@
 import { compareText } from '../formula/compare';
 import { numberText } from '../formula/numberText';
 import type { Scalar } from '../formula/scalar';
-import type { Nodes } from './nodes';
 import type { CellContent } from './workbookView';
 
 /**
  * Whether a recomputed value is what the cell shows, within max(1e-9 |y|, 1e-12 Σ|c x|) for numbers.
  *
+ * @param turnover  Gives Σ|c x|, the size of the terms that made the value; asked for only where the first bound is exceeded.
  * @returns the rest of a sentence that begins with the cell where they differ, else undefined
  */
-export function disagreement(computed: Scalar, shown: CellContent['value'], nodes: Nodes, id: number): string | undefined {
+export function disagreement(computed: Scalar, shown: CellContent['value'], turnover: () => number): string | undefined {
   if (shown === undefined) return undefined;
   if (computed.k === 'number' && typeof shown === 'number') {
     const difference = Math.abs(computed.v - shown);
-    if (difference <= 1e-9 * Math.abs(shown) || difference <= 1e-12 * nodes.turnover(id)) return undefined;
+    if (difference <= 1e-9 * Math.abs(shown) || difference <= 1e-12 * turnover()) return undefined;
   } else if (computed.k === 'text' && typeof shown === 'string') {
     if (compareText(computed.v, shown) === 0) return undefined;
   } else if (computed.k === 'boolean' && typeof shown === 'boolean') {
@@ -24,10 +24,10 @@ export function disagreement(computed: Scalar, shown: CellContent['value'], node
   return `shows ${shownText(shown)}, but its formula gives ${valueText(computed)}: typed over, or not recalculated`;
 }
 
-const shownText = (v: NonNullable<CellContent['value']>): string =>
+export const shownText = (v: NonNullable<CellContent['value']>): string =>
   typeof v === 'object' ? v.error : typeof v === 'number' ? numberText(v) : typeof v === 'string' ? `"${v}"` : String(v).toUpperCase();
 
-function valueText(s: Scalar): string {
+export function valueText(s: Scalar): string {
   switch (s.k) {
     case 'number':
       return numberText(s.v);
