@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
-import { existsSync, readFileSync } from 'node:fs';
+import { chmodSync, existsSync, readFileSync } from 'node:fs';
+import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { EsbuildPlugin } from 'esbuild-loader';
 import webpack from 'webpack';
@@ -55,6 +56,13 @@ class EmitMetadata {
   }
 }
 
+/** Makes the command executable, for `npx rootsum` in the checkout. */
+class Executable {
+  apply(compiler) {
+    compiler.hooks.afterEmit.tap('Executable', ({ outputOptions }) => chmodSync(join(outputOptions.path, 'rootsum.cjs'), 0o755));
+  }
+}
+
 const functionsBundle = {
   ...common('es2020'),
   name: 'functions',
@@ -72,7 +80,7 @@ const commandBundle = {
   target: 'node20',
   entry: commandEntry,
   output: { path: path('dist'), filename: 'rootsum.cjs' },
-  plugins: [...stamp(), new webpack.BannerPlugin({ banner: '#!/usr/bin/env node', raw: true }), new StampBuild()],
+  plugins: [...stamp(), new webpack.BannerPlugin({ banner: '#!/usr/bin/env node', raw: true }), new StampBuild(), new Executable()],
 };
 
 export default [functionsBundle, ...(existsSync(commandEntry) ? [commandBundle] : [])];

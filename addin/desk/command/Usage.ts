@@ -8,6 +8,7 @@ export const USAGE = `rootsum: worksheet functions for measurement uncertainty, 
   rootsum recalc BOOK.xlsx --out NEW.xlsx         compute a workbook and write it as a new file
   rootsum apply PLAN.json BOOK.xlsx... --out-dir DIR
                                                   add the columns of a plan to workbooks
+  rootsum audit BOOK.xlsx... [--json]             tell whether the formulas of workbooks are read right
   rootsum functions [--json]                      list the functions
 
   rootsum COMMAND --help                          more about one command
@@ -33,6 +34,16 @@ The schema of a plan is addin/desk/command/plan.schema.json.
 
   --out-dir DIR     the folder for the new files; made if it does not exist
   --values          write the library's results as plain values, for readers without the add-in
+  --help            this text`;
+
+export const AUDIT_HELP = `rootsum audit BOOK.xlsx... [--json]
+
+Computes every native formula of each workbook from its stored inputs and compares the result with the
+stored one. Names what differs, the worst first, and every function that cannot be followed. Formulas
+with TODAY, NOW or RAND keep their stored value and are counted. Nothing is written. Exit status: 0 where
+all agree; 1 where something differs, cannot be followed, or a workbook cannot be read.
+
+  --json            an object a workbook on standard output (a list for several), words on standard error
   --help            this text`;
 
 export const FUNCTIONS_HELP = `rootsum functions [--json]

@@ -451,7 +451,7 @@ export function constant(value: CellContent['value']): Scalar {
 const noBlank = (s: Scalar): Scalar => (s.k === 'blank' ? num(0, s.d) : s);
 
 /** An element of an array formula's result: a single row, column or value repeats, what lies beyond is #N/A. */
-function elementOf(m: Matrix, i: number, j: number): Scalar {
+export function elementOf(m: Matrix, i: number, j: number): Scalar {
   const r = m.rows === 1 ? 0 : i;
   const c = m.cols === 1 ? 0 : j;
   return r < m.rows && c < m.cols ? at(m, r, c) : err('#N/A');

@@ -140,6 +140,31 @@ describe('rootsum apply', () => {
   });
 });
 
+describe('rootsum audit', () => {
+  const good = { A1: 2, B1: { f: 'A1*2', v: 4 } };
+
+  it('prints an object with --json, words on standard error, and ends with 0 where all agree', async () => {
+    put('good.xlsx', good);
+    const { status, out, err } = await rootsum('audit', 'good.xlsx', '--json');
+    expect(status).toBe(0);
+    expect(JSON.parse(out)).toMatchObject({ book: 'good.xlsx', formulas: 1, agree: 1, differ: [], unsupported: [], volatile: 0 });
+    expect(err).toContain('good.xlsx: 1 formula cells, 1 agree');
+  });
+
+  it('prints a list for several, and ends with 1 where something differs or cannot be read', async () => {
+    put('good.xlsx', good);
+    put('bad.xlsx', { A1: 2, B1: { f: 'A1*2', v: 5 }, C1: { f: 'BAHTTEXT(A1)', v: 'x' } });
+    const { status, out } = await rootsum('audit', 'good.xlsx', 'bad.xlsx', '--json');
+    expect(status).toBe(1);
+    expect((JSON.parse(out) as { book: string }[]).map((b) => b.book)).toEqual(['good.xlsx', 'bad.xlsx']);
+    const person = await rootsum('audit', 'bad.xlsx', 'none.xlsx');
+    expect([person.status, person.out.split('\n')[0], person.err.trim()]).toEqual([
+      1, 'bad.xlsx: 2 formula cells, 0 agree, 1 differ, 1 not followed', 'none.xlsx: there is no such file',
+    ]);
+    expect(person.out).toContain('S!B1  stored 5, computed 4  =A1*2');
+  });
+});
+
 describe('rootsum functions', () => {
   it('lists every function of functions.json, or gives that file', async () => {
     const json = readFileSync(join(distFolder, 'functions.json'), 'utf8');
@@ -158,8 +183,8 @@ describe('usage', () => {
   });
 
   it.each([
-    [[], 'a command is needed: recalc, apply or functions'],
-    [['fly'], 'there is no command fly: use recalc, apply or functions'],
+    [[], 'a command is needed: recalc, apply, audit or functions'],
+    [['fly'], 'there is no command fly: use recalc, apply, audit or functions'],
     [['recalc'], 'recalc needs one workbook, got 0'],
     [['recalc', 'a.xlsx'], 'recalc needs --out with the name of the new file'],
     [['recalc', 'a.xlsx', '--fast'], "Unknown option '--fast'"],
