@@ -145,6 +145,10 @@ export class Evaluator implements Run {
     return this.cells.used(sheet);
   }
 
+  sheetNamed(name: string): number | undefined {
+    return this.cells.sheetIndex(name);
+  }
+
   lift(
     args: readonly Value[],
     kindOf: (i: number) => ParameterKind,

@@ -28,6 +28,8 @@ export interface Run {
   ): Value;
   /** The size of the sheet's used part: the last row and column that may hold something. */
   used(sheet: number): { rows: number; cols: number };
+  /** The index of the sheet of that name, whatever its case. */
+  sheetNamed(name: string): number | undefined;
   /** The areas of `value`, or the value itself, in order: for functions that take several ranges. */
   parts(value: Value): readonly (Area | Exclude<Value, Union>)[];
 }

@@ -1,16 +1,22 @@
 import type { Native } from '../native';
+import { addresses } from './addresses';
 import { choices } from './choices';
 import { conditionalSums } from './conditionalSums';
 import { conversions } from './conversions';
 import { counts } from './counts';
 import { elementary } from './elementary';
+import { filtering } from './filtering';
 import { information } from './information';
+import { lambdas } from './lambdas';
 import { linest } from './linest';
 import { logic } from './logic';
 import { lookups } from './lookups';
+import { matrices } from './matrices';
 import { ranks } from './ranks';
 import { references } from './references';
 import { rounding } from './rounding';
+import { shaping } from './shaping';
+import { sorting } from './sorting';
 import { spread } from './spread';
 import { straightLine } from './straightLine';
 import { sums } from './sums';
@@ -19,8 +25,10 @@ import { trigonometry } from './trigonometry';
 
 const table = new Map<string, Native>(
   [
-    ...choices, ...conditionalSums, ...conversions, ...counts, ...elementary, ...information, ...linest, ...logic,
-    ...lookups, ...ranks, ...references, ...rounding, ...spread, ...straightLine, ...sums, ...texts, ...trigonometry,
+    ...addresses, ...choices, ...conditionalSums, ...conversions, ...counts,
+    ...elementary, ...filtering, ...information, ...lambdas, ...linest, ...logic, ...lookups,
+    ...matrices, ...ranks, ...references, ...rounding, ...shaping, ...sorting, ...spread, ...straightLine,
+    ...sums, ...texts, ...trigonometry,
   ].map((native) => [native.name, native]),
 );
 

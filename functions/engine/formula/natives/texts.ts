@@ -105,7 +105,7 @@ function concat(run: Run, args: readonly Value[]): Scalar {
 }
 
 /** Text made from other scalars, within the length a cell can hold; links are made through few steps, however many there are. */
-function made(run: Run, value: string, from: readonly Scalar[]): Scalar {
+export function made(run: Run, value: string, from: readonly Scalar[]): Scalar {
   if (value.length > LONGEST) return run.steps.error('#VALUE!', together(run, from));
   const tainted = from.some((s) => s.d !== -1 && (s.k === 'number' || (s.k === 'text' && s.tainted)));
   return text(value, together(run, from).d, tainted);

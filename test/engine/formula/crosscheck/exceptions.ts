@@ -13,6 +13,9 @@ export const exceptions: readonly Exception[] = [
   { engine: 'HyperFormula', name: 'FORECAST', how: 'missing', why: 'not among its functions' },
   { engine: 'HyperFormula', name: 'FORECAST.LINEAR', how: 'missing', why: 'not among its functions' },
   { engine: 'HyperFormula', name: 'LINEST', how: 'missing', why: 'not among its functions' },
+  { engine: 'HyperFormula', name: 'MDETERM', how: 'missing', why: 'not among its functions' },
+  { engine: 'HyperFormula', name: 'MINVERSE', how: 'missing', why: 'not among its functions' },
+  { engine: 'LibreOffice', name: 'SEQUENCE', how: 'missing', why: 'not among its functions before version 24.8' },
   {
     engine: 'HyperFormula', name: 'ACOT', how: 'differs',
     why: 'gives the angle between -π/2 and π/2 for negative arguments; the documentation of Excel says between 0 and π',

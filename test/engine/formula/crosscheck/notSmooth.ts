@@ -1,27 +1,31 @@
 /** A native function without a row in the table of smooth ones. */
 export interface NotSmooth {
   readonly name: string;
-  readonly why: 'constant' | 'rounding' | 'count' | 'decision' | 'selection' | 'text';
+  readonly why: 'constant' | 'rounding' | 'count' | 'decision' | 'selection' | 'function' | 'text';
 }
 
 /**
  * Functions whose slopes are not derivatives, so that differences cannot check them:
- * constant    takes no argument
+ * constant    takes no argument, or only a size
  * rounding    slope 1 by convention where the true one is 0
  * count       a number, a position: slope 0 to what was looked at
  * decision    a truth value, or a value passed through by a condition
  * selection   a value picked out of others, or a sum or mean of those that meet a condition
+ * function    has the slopes of the function that is handed to it
  * text        made from text, or read out of text
  */
 export const notSmooth: readonly NotSmooth[] = [
-  ...listed('constant', 'PI TRUE FALSE NA'),
+  ...listed('constant', 'PI TRUE FALSE NA MUNIT'),
   ...listed('rounding', 'MROUND ROUND ROUNDDOWN ROUNDUP'),
   ...listed('count', 'COUNT COUNTA COUNTBLANK COUNTIF COUNTIFS COLUMN COLUMNS ROW ROWS MATCH XMATCH'),
-  ...listed('count', 'ERROR.TYPE TYPE LEN FIND SEARCH'),
+  ...listed('count', 'AREAS ERROR.TYPE TYPE LEN FIND SEARCH'),
   ...listed('decision', 'AND OR NOT XOR IF IFS IFERROR IFNA SWITCH'),
   ...listed('decision', 'EXACT ISBLANK ISERR ISERROR ISEVEN ISLOGICAL ISNA ISNONTEXT ISNUMBER ISODD ISREF ISTEXT'),
   ...listed('selection', 'AVERAGEIF AVERAGEIFS MAXIFS MINIFS SUMIF SUMIFS CHOOSE INDEX LOOKUP HLOOKUP VLOOKUP XLOOKUP N T'),
-  ...listed('text', 'CONCAT CONCATENATE LEFT LOWER MID REPT RIGHT SUBSTITUTE TEXT TRIM UPPER VALUE'),
+  ...listed('selection', 'CHOOSECOLS CHOOSEROWS DROP EXPAND FILTER HSTACK INDIRECT OFFSET SORT SORTBY TAKE TOCOL TOROW'),
+  ...listed('selection', 'TRANSPOSE UNIQUE VSTACK WRAPCOLS WRAPROWS'),
+  ...listed('function', 'BYCOL BYROW MAKEARRAY MAP REDUCE SCAN'),
+  ...listed('text', 'ADDRESS CONCAT CONCATENATE LEFT LOWER MID REPT RIGHT SUBSTITUTE TEXT TRIM UPPER VALUE'),
 ];
 
 function listed(why: NotSmooth['why'], names: string): NotSmooth[] {

@@ -77,6 +77,12 @@ export const smoothTable: readonly Row[] = [
     .map(([i, j]) => finer(5e-4, row('LINEST', `=INDEX(LINEST(A1:A7,B1:C7,TRUE,TRUE),${i},${j})`, planePoints))),
   ...[1, 2].flatMap((i) => [1, 2].map((j) => row('LINEST', `=INDEX(LINEST(A1:A7,B1:C7,FALSE,TRUE),${i},${j})`, planePoints))),
   ...[1, 2, 3].map((j) => row('LINEST', `=INDEX(LINEST(A1:F1,A2:F3),1,${j})`, acrossPoints)),
+
+  row('MMULT', '=SUMSQ(MMULT(A1:C2,D1:E3))', { ...block('ABC', 2, [1, 9]), ...block('DE', 3, [1, 9]) }),
+  row('MMULT', '=SUM(MMULT(A1:C1,D1:D3))', { ...block('ABC', 1, [1, 9]), ...block('D', 3, [1, 9]) }),
+  ...[1, 2, 3].map((n) => row('MDETERM', `=MDETERM(A1:${'ABC'[n - 1]}${n})`, (from) => dominant(from, n))),
+  ...places(3, 3).map(([i, j]) => row('MINVERSE', `=INDEX(MINVERSE(A1:C3),${i},${j})`, (from) => dominant(from, 3))),
+  row('SEQUENCE', '=SUMSQ(SEQUENCE(3,2,A1,B1))', { A1: [1, 5], B1: [1, 2] }),
 ];
 
 function row(name: string, formula: string, cells: Readonly<Record<string, Limits>> | Row['draw']): Row {
@@ -142,6 +148,13 @@ function planePoints(from: Draws): Numbers {
 function acrossPoints(from: Draws): Numbers {
   const plane = planePoints(from);
   return Object.fromEntries([...'ABCDEF'].flatMap((c, i) => [...'ABC'].map((of, r) => [`${c}${r + 1}`, plane[`${of}${i + 1}`]])));
+}
+
+/** A square block whose diagonal outweighs the rest, so that it stays far from singular; its rows in any order. */
+function dominant(from: Draws, size: number): Numbers {
+  const order = from.shuffled([1, 2, 3].slice(0, size));
+  return Object.fromEntries(places(size, size).map(([i, j]) =>
+    [`${'ABC'[j - 1]}${i}`, order[i - 1] === j ? from.between(6, 9) : from.between(-2.9, -0.3)]));
 }
 
 const only = (column: string, cells: Numbers): Numbers =>

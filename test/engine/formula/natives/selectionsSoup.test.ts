@@ -5,13 +5,19 @@ import type { EngineError } from '../../../../functions/engine/EngineError';
 import { compile } from '../../../../functions/engine/formula/compile';
 import { type Cells, Evaluator } from '../../../../functions/engine/formula/evaluate';
 import { nativeNamed } from '../../../../functions/engine/formula/natives';
+import { addresses } from '../../../../functions/engine/formula/natives/addresses';
 import { choices } from '../../../../functions/engine/formula/natives/choices';
 import { conditionalSums } from '../../../../functions/engine/formula/natives/conditionalSums';
 import { conversions } from '../../../../functions/engine/formula/natives/conversions';
+import { filtering } from '../../../../functions/engine/formula/natives/filtering';
 import { information } from '../../../../functions/engine/formula/natives/information';
+import { lambdas } from '../../../../functions/engine/formula/natives/lambdas';
 import { logic } from '../../../../functions/engine/formula/natives/logic';
 import { lookups } from '../../../../functions/engine/formula/natives/lookups';
+import { matrices } from '../../../../functions/engine/formula/natives/matrices';
 import { references } from '../../../../functions/engine/formula/natives/references';
+import { shaping } from '../../../../functions/engine/formula/natives/shaping';
+import { sorting } from '../../../../functions/engine/formula/natives/sorting';
 import { texts } from '../../../../functions/engine/formula/natives/texts';
 import { type Scalar, BLANK, bool, err, num, text } from '../../../../functions/engine/formula/scalar';
 
@@ -42,10 +48,13 @@ const cells: Cells = {
 const argument = fc.constantFrom(
   '', '1', '0', '-1', '2.5', '1E300', '-1E300', '"a"', '""', '"12"', '">1"', '"*"', '"~"', 'TRUE', 'FALSE', '#N/A', '#DIV/0!', '1/0',
   'A1', 'A2', 'A3', 'A4', 'A5', 'A6', 'A7', 'Z9', 'C1', 'A1:A7', 'B1:B4', 'A1:C4', 'B1:C1', 'B1:B12', 'A2:F2', 'Z1:Z3', '(A1:A2,B1:B2)',
-  '{1,2}', '{1;"x";TRUE}', '{1,#N/A;"b",4}', 'A1:A3*1', 'B1:B4&""', 'LAMBDA(x,x)', 'INDEX(B1:B4,B2)', 'IF(B1>0,B1:B4)',
+  '{1,2}', '{1;"x";TRUE}', '{1,#N/A;"b",4}', 'A1:A3*1', 'B1:B4&""', 'LAMBDA(x,x)', 'LAMBDA(x,y,x*y)', '"B3"', 'INDEX(B1:B4,B2)', 'IF(B1>0,B1:B4)',
 );
 
-const names = [...choices, ...conditionalSums, ...conversions, ...information, ...logic, ...lookups, ...references, ...texts].map((n) => n.name);
+const names = [
+  ...addresses, ...choices, ...conditionalSums, ...conversions, ...filtering, ...information, ...lambdas, ...logic, ...lookups,
+  ...matrices, ...references, ...shaping, ...sorting, ...texts,
+].map((n) => n.name);
 
 describe('whatever the arguments are, a value or a refusal comes out', () => {
   it.each(names)('%s', (name) => {
