@@ -2,6 +2,7 @@ import type { Declaration } from './declaration';
 import { carryFamily } from './families/carry';
 import { combinationFunctions } from './families/combination';
 import { coverageFunctions } from './families/coverage';
+import { decisionFunctions } from './families/decision';
 import { proofFunctions } from './families/proof';
 import { roundingFunctions } from './families/rounding';
 import { standardUncertaintyFunctions } from './families/standardUncertainty';
@@ -13,5 +14,6 @@ export const registry: readonly Declaration[] = [
   ...carryFamily,
   ...roundingFunctions,
   ...coverageFunctions,
+  ...decisionFunctions,
   ...proofFunctions,
 ];
