@@ -5,6 +5,7 @@ import { coverageFunctions } from './families/coverage';
 import { decisionFunctions } from './families/decision';
 import { proofFunctions } from './families/proof';
 import { roundingFunctions } from './families/rounding';
+import { significantFigureFunctions } from './families/significantFigures';
 import { standardUncertaintyFunctions } from './families/standardUncertainty';
 
 /** Every worksheet function: the single source of truth for metadata, argument checking, help and tables. */
@@ -15,5 +16,6 @@ export const registry: readonly Declaration[] = [
   ...roundingFunctions,
   ...coverageFunctions,
   ...decisionFunctions,
+  ...significantFigureFunctions,
   ...proofFunctions,
 ];
