@@ -1,3 +1,5 @@
+import { EngineError } from '../EngineError';
+import { readDateText } from './natives/dateText';
 import { numberText, textNumber } from './numberText';
 import { type Bool, type Err, type Num, type Scalar, type Text, NONE, bool, err, num, text } from './scalar';
 import type { Steps } from './steps';
@@ -5,7 +7,12 @@ import type { Steps } from './steps';
 const ZERO: Num = { k: 'number', v: 0, d: NONE };
 const EMPTY: Text = { k: 'text', v: '', d: NONE, tainted: false };
 
-/** A scalar where an operator or a number argument wants a number: blank 0, TRUE 1, text read as a number, else #VALUE!. */
+/**
+ * A scalar where an operator or a number argument wants a number: blank 0, TRUE 1, text read as a number, a date or a time, else
+ * #VALUE!.
+ *
+ * @throws EngineError "refused" for text that may be a date in a form that is not read here
+ */
 export function toNumber(steps: Steps, s: Scalar): Num | Err {
   switch (s.k) {
     case 'number':
@@ -16,10 +23,16 @@ export function toNumber(steps: Steps, s: Scalar): Num | Err {
     case 'boolean':
       return num(s.v ? 1 : 0, s.d);
     case 'text': {
-      const v = textNumber(s.v);
+      const v = textNumber(s.v) ?? dateNumber(s.v);
       return v === undefined ? err('#VALUE!', s.d) : steps.fromText(v, s);
     }
   }
+}
+
+function dateNumber(written: string): number | undefined {
+  const read = readDateText(written);
+  if (read === 'unknown') throw new EngineError('refused', `takes the text "${written}" for a number, which may be a date in a form that is not read here`);
+  return read === 'none' ? undefined : read.day + read.clock;
 }
 
 /** A scalar where text is wanted: numbers in General format, TRUE and FALSE in capitals, blank "". */

@@ -1,6 +1,7 @@
 import { compareNumbers, compareText } from '../compare';
 import { textNumber } from '../numberText';
 import type { Scalar } from '../scalar';
+import { readDateText } from './dateText';
 import { hasWildcards, wildcards } from './wildcards';
 
 /** Whether a cell meets a criterion. */
@@ -47,7 +48,7 @@ function textCriterion(written: string): Criterion {
 }
 
 function relationTo(relation: Exclude<Relation, '<>'>, operand: string): Criterion {
-  const n = textNumber(operand);
+  const n = numberIn(operand);
   if (n !== undefined) return numberRelation(relation, n);
   const word = operand.toUpperCase();
   if (word === 'TRUE' || word === 'FALSE') {
@@ -62,12 +63,20 @@ function relationTo(relation: Exclude<Relation, '<>'>, operand: string): Criteri
   return (cell) => cell.k === 'text' && holds(relation, compareText(cell.v, operand));
 }
 
+/** The number that a text stands for, or the serial number of the date or time that it says. */
+function numberIn(text: string): number | undefined {
+  const n = textNumber(text);
+  if (n !== undefined) return n;
+  const read = readDateText(text);
+  return typeof read === 'object' ? read.day + read.clock : undefined;
+}
+
 function numberRelation(relation: Exclude<Relation, '<>'>, wanted: number): Criterion {
   if (relation !== '=') return (cell) => cell.k === 'number' && holds(relation, compareNumbers(cell.v, wanted));
   return (cell) => {
     if (cell.k === 'number') return compareNumbers(cell.v, wanted) === 0;
     if (cell.k !== 'text') return false;
-    const read = textNumber(cell.v);
+    const read = numberIn(cell.v);
     return read !== undefined && compareNumbers(read, wanted) === 0;
   };
 }

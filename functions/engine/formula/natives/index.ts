@@ -1,10 +1,16 @@
 import type { Native } from '../native';
 import { addresses } from './addresses';
+import { characters } from './characters';
 import { choices } from './choices';
 import { conditionalSums } from './conditionalSums';
 import { conversions } from './conversions';
+import { convert } from './convert';
 import { counts } from './counts';
+import { dates } from './dates';
+import { dateSpans } from './dateSpans';
 import { elementary } from './elementary';
+import { engineering } from './engineering';
+import { errorFunction } from './errorFunction';
 import { filtering } from './filtering';
 import { information } from './information';
 import { lambdas } from './lambdas';
@@ -12,6 +18,7 @@ import { linest } from './linest';
 import { logic } from './logic';
 import { lookups } from './lookups';
 import { matrices } from './matrices';
+import { multiples } from './multiples';
 import { ranks } from './ranks';
 import { references } from './references';
 import { rounding } from './rounding';
@@ -20,15 +27,19 @@ import { sorting } from './sorting';
 import { spread } from './spread';
 import { straightLine } from './straightLine';
 import { sums } from './sums';
+import { textPieces } from './textPieces';
 import { texts } from './texts';
+import { times } from './times';
 import { trigonometry } from './trigonometry';
+import { workdays } from './workdays';
+import { writtenNumbers } from './writtenNumbers';
 
 const table = new Map<string, Native>(
   [
-    ...addresses, ...choices, ...conditionalSums, ...conversions, ...counts,
-    ...elementary, ...filtering, ...information, ...lambdas, ...linest, ...logic, ...lookups,
-    ...matrices, ...ranks, ...references, ...rounding, ...shaping, ...sorting, ...spread, ...straightLine,
-    ...sums, ...texts, ...trigonometry,
+    ...addresses, ...characters, ...choices, ...conditionalSums, ...conversions, ...convert, ...counts, ...dates, ...dateSpans,
+    ...elementary, ...engineering, ...errorFunction, ...filtering, ...information, ...lambdas, ...linest, ...logic, ...lookups,
+    ...matrices, ...multiples, ...ranks, ...references, ...rounding, ...shaping, ...sorting, ...spread, ...straightLine,
+    ...sums, ...textPieces, ...texts, ...times, ...trigonometry, ...workdays, ...writtenNumbers,
   ].map((native) => [native.name, native]),
 );
 

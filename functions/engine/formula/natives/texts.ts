@@ -24,7 +24,7 @@ export const texts: Native[] = [
   }),
   scalarFunction('LEN', ['text'], (run, args) => run.steps.count(textAt(args, 0).v.length, textAt(args, 0))),
   altered('TRIM', (s) => s.replace(/ +/g, ' ').replace(/^ | $/g, '')),
-  altered('UPPER', (s) => s.toUpperCase()),
+  altered('UPPER', capitals),
   altered('LOWER', (s) => s.toLowerCase()),
   scalarFunction('CONCATENATE', ['text'], (run, args) => {
     const parts = args.filter((a) => a !== undefined) as Text[];
@@ -51,6 +51,11 @@ function side(name: string, cut: (s: string, n: number) => string): Native {
     const count = args.length < 2 ? { n: 1, from: EMPTY } : whole(args, 1);
     return count.n < 0 ? run.steps.error('#VALUE!', count.from) : made(run, cut(s.v, count.n), [s, count.from]);
   }, { args: [1, 2] });
+}
+
+/** Capitals, one for each letter: a letter whose capital would be two (ß) stays, as in the sheet. @source common practice */
+function capitals(s: string): string {
+  return Array.from(s, (c) => (c.toUpperCase().length === c.length ? c.toUpperCase() : c)).join('');
 }
 
 function altered(name: string, change: (s: string) => string): Native {

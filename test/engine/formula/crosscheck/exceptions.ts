@@ -13,6 +13,7 @@ export const exceptions: readonly Exception[] = [
   { engine: 'HyperFormula', name: 'FORECAST', how: 'missing', why: 'not among its functions' },
   { engine: 'HyperFormula', name: 'FORECAST.LINEAR', how: 'missing', why: 'not among its functions' },
   { engine: 'HyperFormula', name: 'LINEST', how: 'missing', why: 'not among its functions' },
+  { engine: 'HyperFormula', name: 'CONVERT', how: 'missing', why: 'not among its functions' },
   { engine: 'HyperFormula', name: 'MDETERM', how: 'missing', why: 'not among its functions' },
   { engine: 'HyperFormula', name: 'MINVERSE', how: 'missing', why: 'not among its functions' },
   { engine: 'LibreOffice', name: 'SEQUENCE', how: 'missing', why: 'not among its functions before version 24.8' },

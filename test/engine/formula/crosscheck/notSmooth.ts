@@ -1,7 +1,7 @@
 /** A native function without a row in the table of smooth ones. */
 export interface NotSmooth {
   readonly name: string;
-  readonly why: 'constant' | 'rounding' | 'count' | 'decision' | 'selection' | 'function' | 'text';
+  readonly why: 'constant' | 'rounding' | 'count' | 'decision' | 'selection' | 'function' | 'text' | 'values only';
 }
 
 /**
@@ -13,6 +13,7 @@ export interface NotSmooth {
  * selection   a value picked out of others, or a sum or mean of those that meet a condition
  * function    has the slopes of the function that is handed to it
  * text        made from text, or read out of text
+ * values only  in steps, or with a slope that is not known here: carry refuses where an uncertain number reaches it
  */
 export const notSmooth: readonly NotSmooth[] = [
   ...listed('constant', 'PI TRUE FALSE NA MUNIT'),
@@ -25,6 +26,11 @@ export const notSmooth: readonly NotSmooth[] = [
   ...listed('selection', 'CHOOSECOLS CHOOSEROWS DROP EXPAND FILTER HSTACK INDIRECT OFFSET SORT SORTBY TAKE TOCOL TOROW'),
   ...listed('selection', 'TRANSPOSE UNIQUE VSTACK WRAPCOLS WRAPROWS'),
   ...listed('function', 'BYCOL BYROW MAKEARRAY MAP REDUCE SCAN'),
+  ...listed('count', 'DELTA GESTEP EVEN ODD QUOTIENT GCD LCM'),
+  ...listed('values only', 'CEILING CEILING.MATH FLOOR FLOOR.MATH'),
+  ...listed('values only', 'DATE DATEDIF DAY DAYS EDATE EOMONTH HOUR ISOWEEKNUM MINUTE MONTH NETWORKDAYS SECOND TIME WEEKDAY WEEKNUM WORKDAY YEAR YEARFRAC'),
+  ...listed('text', 'BIN2DEC CHAR CLEAN CODE DATEVALUE DEC2BIN DEC2HEX FIXED HEX2DEC NUMBERVALUE PROPER REPLACE TEXTAFTER TEXTBEFORE TEXTJOIN'),
+  ...listed('text', 'TIMEVALUE UNICHAR UNICODE'),
   ...listed('text', 'ADDRESS CONCAT CONCATENATE LEFT LOWER MID REPT RIGHT SUBSTITUTE TEXT TRIM UPPER VALUE'),
 ];
 

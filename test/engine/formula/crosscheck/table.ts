@@ -82,6 +82,9 @@ export const smoothTable: readonly Row[] = [
   row('MMULT', '=SUM(MMULT(A1:C1,D1:D3))', { ...block('ABC', 1, [1, 9]), ...block('D', 3, [1, 9]) }),
   ...[1, 2, 3].map((n) => row('MDETERM', `=MDETERM(A1:${'ABC'[n - 1]}${n})`, (from) => dominant(from, n))),
   ...places(3, 3).map(([i, j]) => row('MINVERSE', `=INDEX(MINVERSE(A1:C3),${i},${j})`, (from) => dominant(from, 3))),
+  unary('ERF', -2, 2), row('ERF', '=ERF(A1,B1)', { A1: [-1, 0.2], B1: [0.5, 2] }), unary('ERFC', -2, 3),
+  row('SERIESSUM', '=SERIESSUM(A1,B1,C1,D1:F1)', { A1: [0.5, 2], B1: [0.5, 2], C1: [0.5, 2], D1: [1, 3], E1: [1, 3], F1: [1, 3] }),
+  row('CONVERT', '=CONVERT(A1,"ft","m")', { A1: [1, 9] }), row('CONVERT', '=CONVERT(A1,"F","C")', { A1: [40, 99] }),
   row('SEQUENCE', '=SUMSQ(SEQUENCE(3,2,A1,B1))', { A1: [1, 5], B1: [1, 2] }),
 ];
 

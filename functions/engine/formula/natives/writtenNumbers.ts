@@ -1,0 +1,82 @@
+import { formatPlaces } from '../../numbers/decimal';
+import { type Native, scalarFunction } from '../native';
+import type { Run } from '../run';
+import { type Num, type Scalar, type Text, text } from '../scalar';
+import { numberOf } from './argument';
+import { refuseUse } from './refuseUse';
+import { strictFunction } from './strictFunction';
+import { made } from './texts';
+import { wholeOf } from './wholeOf';
+
+/** Numbers written as text and read back: FIXED, NUMBERVALUE, and binary and hexadecimal notation in ten places. */
+export const writtenNumbers: Native[] = [
+  scalarFunction('FIXED', ['number', 'number', 'boolean'], fixed, { args: [1, 3] }),
+  scalarFunction('NUMBERVALUE', ['text', 'text', 'text'], numberValue, { args: [1, 3] }),
+  written('DEC2BIN', 2),
+  written('DEC2HEX', 16),
+  read('BIN2DEC', 2),
+  read('HEX2DEC', 16),
+];
+
+/** FIXED(x, [places = 2], [no commas]): rounded half away from zero in decimal; a negative number of places rounds to tens. */
+function fixed(run: Run, args: readonly (Scalar | undefined)[]): Scalar {
+  if (args.length > 1 && args[1] === undefined) refuseUse('FIXED', 'an argument is left empty');
+  const [x, digits, plain] = [numberOf(args[0]), args[1] as Num | undefined, args[2]];
+  const places = Math.trunc(digits?.v ?? 2);
+  if (places > 127) return run.steps.error('#VALUE!', x, digits!);
+  const shown = formatPlaces(x.v, Math.max(places, -400), 'halfUp');
+  const [, sign, whole, rest] = /^(-?)(\d+)(.*)$/.exec(shown)!;
+  const grouped = plain?.k === 'boolean' && plain.v ? whole : whole.replace(/\B(?=(\d{3})+$)/g, ',');
+  return made(run, sign + grouped + rest, [x, ...(digits ? [digits] : []), ...(plain ? [plain] : [])]);
+}
+
+const READABLE = /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i;
+
+/** NUMBERVALUE(text, [decimal separator], [group separator]): blanks are passed over, each % divides by 100, "" is 0. */
+function numberValue(run: Run, args: readonly (Scalar | undefined)[]): Scalar {
+  const [s, decimal, group] = args.map((a) => (a as Text | undefined) ?? text(''));
+  const point = args.length > 1 ? decimal.v[0] : '.';
+  const comma = args.length > 2 ? group.v[0] : ',';
+  const by = [s, decimal, group].filter((a) => a !== undefined);
+  if (point === undefined || comma === undefined || point === comma) refuseUse('NUMBERVALUE', 'a separator is empty, or both are the same');
+  const [, body, percents] = /^(.*?)(%*)$/s.exec(s.v.replace(/\s/g, ''))!;
+  const [whole, ...fractions] = body.split(point);
+  if (fractions.length > 1 || fractions[0]?.includes(comma)) return run.steps.error('#VALUE!', ...by);
+  const digits = whole.split(comma).join('') + (fractions.length ? `.${fractions[0]}` : '');
+  if (body === '' && percents === '') return run.steps.chosen(run.steps.fromText(0, s), ...by.slice(1));
+  if (!READABLE.test(digits) || !Number.isFinite(Number(digits))) {
+    if (/\d/.test(digits)) refuseUse('NUMBERVALUE', `"${s.v}" may be a number in a form that is not read here`);
+    return run.steps.error('#VALUE!', ...by);
+  }
+  return run.steps.chosen(run.steps.fromText(Number(digits) / 100 ** percents.length, s), ...by.slice(1));
+}
+
+/** So many digits of notation with base 2 or 16, negative numbers as their complement. */
+const PLACES = 10;
+
+/** DEC2BIN and DEC2HEX(number, [places]). Negative numbers take all ten places. */
+function written(name: string, base: 2 | 16): Native {
+  return strictFunction(name, ['number', 'number'], (run, args) => {
+    const [x, places] = args as Num[];
+    const n = Math.abs(x.v) < 1 ? 0 : wholeOf(name, x.v);
+    const half = base ** PLACES / 2;
+    if (n < -half || n >= half) return run.steps.error('#NUM!', ...(args as Num[]));
+    const digits = (n < 0 ? n + 2 * half : n).toString(base).toUpperCase();
+    const width = places === undefined ? digits.length : wholeOf(name, places.v);
+    if (width < 1 || width > PLACES || (n >= 0 && width < digits.length)) {
+      if (n < 0) refuseUse(name, 'its number of places is unusual');
+      return run.steps.error('#NUM!', ...(args as Num[]));
+    }
+    return made(run, n < 0 ? digits : digits.padStart(width, '0'), args as Num[]);
+  }, { args: [1, 2] });
+}
+
+/** BIN2DEC and HEX2DEC: up to ten digits, the first of ten telling a negative number. */
+function read(name: string, base: 2 | 16): Native {
+  return strictFunction(name, ['text'], (run, args) => {
+    const s = args[0] as Text;
+    if (!(base === 2 ? /^[01]{0,10}$/ : /^[0-9a-f]{0,10}$/i).test(s.v)) return run.steps.error('#NUM!', s);
+    const n = s.v === '' ? 0 : parseInt(s.v, base);
+    return run.steps.fromText(n >= base ** PLACES / 2 ? n - base ** PLACES : n, s);
+  });
+}

@@ -1,0 +1,37 @@
+/** Why the other program's stored result is not what a call gives here. */
+const REASONS = {
+  name: 'LibreOffice has errors of its own, which it saves as #VALUE!; the vendor\'s documentation names the error given here',
+  boolean: 'LibreOffice holds TRUE as the number 1, in cells and as an argument',
+} as const;
+
+/** Formulas whose result differs from LibreOffice's, with the reason; the vendor's documentation was read for each. */
+export const disagreements: ReadonlyMap<string, string> = new Map([
+  ...each(REASONS.name, `
+    ACOSH(0.5) | ACOTH(0.5) | ATANH(1) | FLOOR(3,0) | GCD(-3,6) | LCM(-3,6) | LN(0) | LOG(-1) | LOG(8,1) | LOG10(0) | QUOTIENT(1,0) |
+    SQRT(-1) | SQRTPI(-1) | CORREL(nums,sorted) | FORECAST(30,nums,sorted) | INTERCEPT(nums,sorted) | LARGE(nums,0) | LARGE(nums,9) |
+    MEDIAN(words) | PEARSON(nums,sorted) | RSQ(nums,sorted) | SLOPE(nums,sorted) | SMALL(nums,0) | SMALL(nums,9) | STEYX(nums,sorted) |
+    INDEX(nums,9) | INDEX(square,2,4) | OFFSET(Data!A1,-1,0) | DATE(-1,1,1) | DATEDIF(45292,36526,"D") | TIME(-1,0,0) | WEEKDAY(45292,9) |
+    BIN2DEC(2) | CONVERT(1,"kg","m") | DEC2BIN(512) | HEX2DEC("G")`),
+  ...each('LibreOffice calls a division by zero #NUM! here', 'COT(0) | COTH(0) | CSC(0) | CSCH(0) | POWER(0,-1)'),
+  ...each(REASONS.boolean, `
+    SUM(mixed) | SUMSQ(mixed) | VAR(mixed) | VAR.S(mixed) | VAR.P(mixed) | COUNT(mixed) | STDEV(mixed) | STDEV.S(mixed) | STDEV.P(mixed) |
+    AVERAGE(mixed) | DEVSQ(mixed) | TYPE(TRUE) | CONCAT("a",1,TRUE) | CONCATENATE("a",1,TRUE) | LOWER(TRUE) | TEXTJOIN("-",FALSE,mixed)`),
+  ...each('text given as an argument is read as a number; LibreOffice does so only where it is told to', `
+    PRODUCT(2,"3",TRUE) | SUM(1,"3",TRUE) | AVERAGE(1,"3") | MAX(1,"9",TRUE)`),
+  ...each('#DIV/0! by the vendor\'s documentation of the function', 'ATAN2(0,0)'),
+  ...each('#NUM! by the vendor\'s documentation, for the signs differ', 'MROUND(5,-2)'),
+  ...each('LibreOffice writes the address as its own sheets have it', 'ADDRESS(2,3,3,TRUE,"Two words")'),
+  ...each('LibreOffice takes wildcards only where the file says so', 'VLOOKUP("b*",{"abc",1;"bcd",2},2,FALSE)'),
+  ...each('codes run from 1 on', 'CHAR(0) | UNICHAR(0)'),
+  ...each('#VALUE! for an empty text by the vendor\'s documentation', 'CODE("")'),
+  ...each('an empty text is found at the start (common practice)', 'FIND("","abc")'),
+  ...each('percent signs are read, an empty text is 0, by the vendor\'s documentation', 'NUMBERVALUE("3.5%") | NUMBERVALUE("")'),
+  ...each('years from 0 to 1899 are counted from 1900, by the vendor\'s documentation', 'DATE(108,1,2)'),
+  ...each('the vendor\'s calendar begins with day 0 of January 1900', 'DAY(0) | DAY(-1)'),
+  ...each('the pound is 0.45359237 kg exactly', 'CONVERT(1,"lbm","kg")'),
+  ...each('a union does not survive LibreOffice\'s writing', 'AREAS((nums,other))'),
+]);
+
+function each(why: string, formulas: string): [string, string][] {
+  return formulas.trim().split(/\s*\|\s*/).map((formula) => [formula, why]);
+}
