@@ -1,7 +1,10 @@
 import type { Native } from '../native';
 import { addresses } from './addresses';
+import { allValues } from './allValues';
+import { betaFamily } from './betaFamily';
 import { characters } from './characters';
 import { choices } from './choices';
+import { combinatorics } from './combinatorics';
 import { conditionalSums } from './conditionalSums';
 import { conversions } from './conversions';
 import { convert } from './convert';
@@ -12,23 +15,33 @@ import { elementary } from './elementary';
 import { engineering } from './engineering';
 import { errorFunction } from './errorFunction';
 import { filtering } from './filtering';
+import { gammaFamily } from './gammaFamily';
+import { hypothesisTests } from './hypothesisTests';
 import { information } from './information';
 import { lambdas } from './lambdas';
 import { linest } from './linest';
 import { logic } from './logic';
 import { lookups } from './lookups';
 import { matrices } from './matrices';
+import { means } from './means';
+import { moments } from './moments';
 import { multiples } from './multiples';
+import { normalFamily } from './normalFamily';
+import { pairSums } from './pairSums';
+import { quantiles } from './quantiles';
+import { rankings } from './rankings';
 import { ranks } from './ranks';
 import { references } from './references';
 import { rounding } from './rounding';
 import { shaping } from './shaping';
 import { sorting } from './sorting';
 import { spread } from './spread';
+import { standardized } from './standardized';
 import { straightLine } from './straightLine';
 import { sums } from './sums';
 import { textPieces } from './textPieces';
 import { texts } from './texts';
+import { tFamily } from './tFamily';
 import { times } from './times';
 import { trigonometry } from './trigonometry';
 import { workdays } from './workdays';
@@ -36,10 +49,12 @@ import { writtenNumbers } from './writtenNumbers';
 
 const table = new Map<string, Native>(
   [
-    ...addresses, ...characters, ...choices, ...conditionalSums, ...conversions, ...convert, ...counts, ...dates, ...dateSpans,
-    ...elementary, ...engineering, ...errorFunction, ...filtering, ...information, ...lambdas, ...linest, ...logic, ...lookups,
-    ...matrices, ...multiples, ...ranks, ...references, ...rounding, ...shaping, ...sorting, ...spread, ...straightLine,
-    ...sums, ...textPieces, ...texts, ...times, ...trigonometry, ...workdays, ...writtenNumbers,
+    ...addresses, ...allValues, ...betaFamily, ...characters, ...choices, ...combinatorics, ...conditionalSums, ...conversions,
+    ...convert, ...counts, ...dates, ...dateSpans, ...elementary, ...engineering, ...errorFunction, ...filtering,
+    ...gammaFamily, ...hypothesisTests, ...information, ...lambdas, ...linest, ...logic, ...lookups, ...matrices, ...means,
+    ...moments, ...multiples, ...normalFamily, ...pairSums, ...quantiles, ...rankings, ...ranks, ...references, ...rounding,
+    ...shaping, ...sorting, ...spread, ...standardized, ...straightLine, ...sums, ...textPieces, ...texts, ...tFamily,
+    ...times, ...trigonometry, ...workdays, ...writtenNumbers,
   ].map((native) => [native.name, native]),
 );
 

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { libreOffice, libreOfficeVersion } from '../../../tools/libreOffice';
+import { storedFormula } from '../../../golden/storedFormula';
 import { exceptionOf, verdicts } from './agreement';
 import { exceptions } from './exceptions';
 import { type Job, FORMULA_COLUMN, lay } from './job';
@@ -7,13 +8,10 @@ import { smoothTable } from './table';
 
 const version = libreOfficeVersion();
 
-/** Functions that a file stores with a prefix, for they are younger than its format. */
-const PREFIXED = /(?<![A-Z.])(STDEV\.[SP]|VAR\.[SP]|FORECAST\.LINEAR|SECH?|CSCH?|COTH?|ACOTH?)(?=\()/g;
-
 function engine(jobs: readonly Job[]): (number | string)[] {
   const laid = lay(jobs);
   const formulas = laid.formulas.map(({ row, formula }) => (
-    { row, col: FORMULA_COLUMN, formula: formula.replace(PREFIXED, '_xlfn.$1') }));
+    { row, col: FORMULA_COLUMN, formula: storedFormula(formula) }));
   const values = libreOffice({ rows: laid.rows, numbers: laid.numbers, formulas });
   return laid.formulas.map(({ row }) => values[row]?.[FORMULA_COLUMN] ?? 'nothing');
 }

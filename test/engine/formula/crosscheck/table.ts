@@ -82,6 +82,44 @@ export const smoothTable: readonly Row[] = [
   row('MMULT', '=SUM(MMULT(A1:C1,D1:D3))', { ...block('ABC', 1, [1, 9]), ...block('D', 3, [1, 9]) }),
   ...[1, 2, 3].map((n) => row('MDETERM', `=MDETERM(A1:${'ABC'[n - 1]}${n})`, (from) => dominant(from, n))),
   ...places(3, 3).map(([i, j]) => row('MINVERSE', `=INDEX(MINVERSE(A1:C3),${i},${j})`, (from) => dominant(from, 3))),
+  ...['GEOMEAN', 'HARMEAN', 'SKEW', 'SKEW.P', 'KURT', 'AVERAGEA', 'VARA', 'VARPA', 'STDEVA', 'STDEVPA'].map((name) => row(name, `=${name}(A1:C2)`, block('ABC', 2, [1, 9]))),
+  ranked('AVEDEV', '=AVEDEV(A1:D1)'), ranked('TRIMMEAN', '=TRIMMEAN(A1:E1,0.4)'), ranked('MAXA', '=MAXA(A1:E1)'), ranked('MINA', '=MINA(A1:E1)'),
+  ...['PERCENTILE', 'PERCENTILE.INC', 'PERCENTILE.EXC'].map((name) => rankedWith(name, `=${name}(A1:E1,F1)`, [0.27, 0.31])),
+  ...['QUARTILE', 'QUARTILE.INC', 'QUARTILE.EXC'].map((name) => ranked(name, `=${name}(A1:D1,1)`)),
+  ...['COVAR', 'COVARIANCE.P', 'COVARIANCE.S', 'SUMX2MY2', 'SUMX2PY2', 'SUMXMY2'].map((name) => line(name, `=${name}(A1:A7,B1:B7)`)),
+  row('STANDARDIZE', '=STANDARDIZE(A1,B1,C1)', { A1: [5, 9], B1: [1, 4], C1: [1, 3] }), unary('FISHER', -0.9, 0.9), unary('FISHERINV', -2, 2),
+  row('PROB', '=PROB({1,2,3},A1:C1/SUM(A1:C1),1,2)', block('ABC', 1, [1, 3])),
+  ...['CONFIDENCE', 'CONFIDENCE.NORM', 'CONFIDENCE.T'].map((name) => row(name, `=${name}(A1,B1,12)`, { A1: [0.02, 0.2], B1: [1, 3] })),
+
+  ...['NORM.DIST', 'NORMDIST'].flatMap((name) => ['1', '0'].map((c) => row(name, `=${name}(A1,B1,C1,${c})`, { A1: [1, 5], B1: [2, 4], C1: [1, 2] }))),
+  ...['NORM.INV', 'NORMINV'].map((name) => row(name, `=${name}(A1,B1,C1)`, { A1: [0.1, 0.9], B1: [2, 4], C1: [1, 2] })),
+  ...['1', '0'].map((c) => row('NORM.S.DIST', `=NORM.S.DIST(A1,${c})`, { A1: [-2, 2] })),
+  unary('NORMSDIST', -3, 3), unary('NORM.S.INV', 0.1, 0.9), unary('NORMSINV', 0.1, 0.9), unary('GAUSS', 0.2, 2), unary('PHI', -2, -0.5),
+  ...['1', '0'].map((c) => row('LOGNORM.DIST', `=LOGNORM.DIST(A1,B1,C1,${c})`, { A1: [1, 5], B1: [0.5, 1.5], C1: [0.5, 2] })),
+  row('LOGNORMDIST', '=LOGNORMDIST(A1,B1,C1)', { A1: [1, 5], B1: [0.5, 1.5], C1: [0.5, 2] }),
+  ...['LOGNORM.INV', 'LOGINV'].map((name) => row(name, `=${name}(A1,B1,C1)`, { A1: [0.1, 0.9], B1: [0.5, 1.5], C1: [0.5, 1] })),
+  ...['1', '0'].map((c) => row('T.DIST', `=T.DIST(A1,5,${c})`, { A1: [-3, 3] })),
+  row('T.DIST.RT', '=T.DIST.RT(A1,5)', { A1: [-2, 4] }), row('T.DIST.2T', '=T.DIST.2T(A1,5)', { A1: [0.3, 4] }),
+  row('TDIST', '=TDIST(A1,5,2)', { A1: [0.3, 4] }), row('T.INV', '=T.INV(A1,5)', { A1: [0.1, 0.4] }),
+  ...['T.INV.2T', 'TINV'].map((name) => row(name, `=${name}(A1,5)`, { A1: [0.02, 0.5] })),
+  ...['1', '0'].map((c) => row('CHISQ.DIST', `=CHISQ.DIST(A1,5,${c})`, { A1: [1, 9] })),
+  ...['CHISQ.DIST.RT', 'CHIDIST'].map((name) => row(name, `=${name}(A1,5)`, { A1: [1, 20] })),
+  row('CHISQ.INV', '=CHISQ.INV(A1,5)', { A1: [0.1, 0.9] }), ...['CHISQ.INV.RT', 'CHIINV'].map((name) => row(name, `=${name}(A1,5)`, { A1: [0.02, 0.9] })),
+  ...['1', '0'].map((c) => row('F.DIST', `=F.DIST(A1,5,7,${c})`, { A1: [0.5, 4] })),
+  ...['F.DIST.RT', 'FDIST'].map((name) => row(name, `=${name}(A1,5,7)`, { A1: [0.5, 4] })),
+  row('F.INV', '=F.INV(A1,5,7)', { A1: [0.1, 0.9] }), ...['F.INV.RT', 'FINV'].map((name) => row(name, `=${name}(A1,5,7)`, { A1: [0.02, 0.9] })),
+  ...['GAMMA.DIST', 'GAMMADIST'].flatMap((name) => ['1', '0'].map((c) => row(name, `=${name}(A1,2.5,B1,${c})`, { A1: [1, 9], B1: [1, 3] }))),
+  ...['GAMMA.INV', 'GAMMAINV'].map((name) => row(name, `=${name}(A1,2.5,B1)`, { A1: [0.1, 0.9], B1: [1, 3] })),
+  ...['1', '0'].map((c) => row('BETA.DIST', `=BETA.DIST(A1,2.5,3.5,${c},B1,C1)`, { A1: [1, 2], B1: [0, 0.5], C1: [3, 4] })),
+  row('BETADIST', '=BETADIST(A1,2.5,3.5,B1,C1)', { A1: [1, 2], B1: [0, 0.5], C1: [3, 4] }),
+  ...['BETA.INV', 'BETAINV'].map((name) => row(name, `=${name}(A1,2.5,3.5,B1,C1)`, { A1: [0.1, 0.9], B1: [0, 0.5], C1: [3, 4] })),
+  ...['EXPON.DIST', 'EXPONDIST'].flatMap((name) => ['1', '0'].map((c) => row(name, `=${name}(A1,B1,${c})`, { A1: [0.5, 2], B1: [0.5, 2] }))),
+  ...['WEIBULL.DIST', 'WEIBULL'].flatMap((name) => ['1', '0'].map((c) => row(name, `=${name}(A1,B1,C1,${c})`, { A1: [0.5, 2], B1: [1.2, 3], C1: [1, 3] }))),
+  ...['POISSON.DIST', 'POISSON'].flatMap((name) => ['1', '0'].map((c) => row(name, `=${name}(3,A1,${c})`, { A1: [1, 9] }))),
+  ...['BINOM.DIST', 'BINOMDIST'].flatMap((name) => ['1', '0'].map((c) => row(name, `=${name}(3,8,A1,${c})`, { A1: [0.1, 0.8] }))),
+  ...['1', '0'].map((c) => row('NEGBINOM.DIST', `=NEGBINOM.DIST(3,5,A1,${c})`, { A1: [0.2, 0.8] })),
+  row('NEGBINOMDIST', '=NEGBINOMDIST(3,5,A1)', { A1: [0.2, 0.8] }),
+
   unary('ERF', -2, 2), row('ERF', '=ERF(A1,B1)', { A1: [-1, 0.2], B1: [0.5, 2] }), unary('ERFC', -2, 3),
   row('SERIESSUM', '=SERIESSUM(A1,B1,C1,D1:F1)', { A1: [0.5, 2], B1: [0.5, 2], C1: [0.5, 2], D1: [1, 3], E1: [1, 3], F1: [1, 3] }),
   row('CONVERT', '=CONVERT(A1,"ft","m")', { A1: [1, 9] }), row('CONVERT', '=CONVERT(A1,"F","C")', { A1: [40, 99] }),
@@ -118,6 +156,12 @@ function ranked(name: string, formula: string): Row {
     const numbers = from.shuffled([1, 2, 3, 4, 5]).map((k) => k + from.between(-0.2, 0.2));
     return Object.fromEntries(numbers.slice(0, formula.includes('D1') ? 4 : 5).map((x, i) => [`${'ABCDE'[i]}1`, x]));
   });
+}
+
+/** The same with a fraction in F1. */
+function rankedWith(name: string, formula: string, fraction: Limits): Row {
+  const { draw } = ranked(name, formula);
+  return row(name, formula, (from) => ({ ...draw(from), F1: from.between(...fraction) }));
 }
 
 function line(name: string, formula: string): Row {
