@@ -5,7 +5,7 @@
  * @param low    Where it does not hold; finite, >= 0.
  * @param high   Where it holds; may be infinite.
  * @returns      Infinity where it holds for no double.
- * @example      firstWhere((x) => x * x >= 2, 0, Infinity) // √2
+ * @example      firstWhere((x) => x * x >= 2, 0, Infinity) // 1.4142135623730951
  */
 export function firstWhere(holds: (x: number) => boolean, low: number, high: number): number {
   let [below, above] = [low, high];

@@ -8,10 +8,10 @@ const MOST_TERMS = 1e6;
  *
  * @param a   > 0, at most 1e8.
  * @param x   >= 0; infinite allowed.
- * @returns   Both in [0, 1]. Relative error about 1e-15 times the larger of 1 and a.
+ * @returns   Both in [0, 1]. Relative error about 1e-15 times the largest of 1, a and x.
  * @throws    EngineError "domain" outside these ranges.
  * @source    DLMF 8.7.1 (series) and 8.9.2 (continued fraction, evaluated forwards by Lentz's method).
- * @example   regularizedGamma(1, 1).upper // exp(−1)
+ * @example   regularizedGamma(1, 1).upper // 0.36787944117144233
  */
 export function regularizedGamma(a: number, x: number): { lower: number; upper: number } {
   if (!(a > 0 && a <= 1e8)) throw new EngineError('domain', `regularizedGamma needs a above 0 and up to 1e8, got ${a}`);

@@ -9,8 +9,8 @@ const close = (a: number, b: number, tolerance: number): void => expect(Math.abs
 describe('regularizedGamma', () => {
   it('is an exponential for a = 1 and a normal distribution for a = 1/2 (closed forms, DLMF 8.4)', () => {
     for (const x of [1e-6, 0.1, 1, 1.9, 2.1, 10, 300]) {
-      close(regularizedGamma(1, x).upper, Math.exp(-x), 2e-14);
-      close(regularizedGamma(0.5, x).lower, normalWithin(Math.sqrt(2 * x)), 2e-14);
+      close(regularizedGamma(1, x).upper, Math.exp(-x), 5e-14);
+      close(regularizedGamma(0.5, x).lower, normalWithin(Math.sqrt(2 * x)), 5e-14);
     }
   });
 
