@@ -19,7 +19,7 @@ export const disagreements: ReadonlyMap<string, string> = new Map([
     QUARTILE.INC(nums,-1) | RANK(99,nums) | TRIMMEAN(nums,1) | BETAINV(2,2,3) | BINOM.DIST(11,10,0.5,TRUE) | CHISQ.DIST(-1,3,TRUE) |
     CHISQ.INV(1.5,2) | CHISQ.INV.RT(0.5,0) | EXPONDIST(0.2,0,TRUE) | F.INV.RT(0,6,4) | FDIST(-1,6,4) | GAMMA(0) | GAMMAINV(2,9,2) |
     GAMMALN(0) | GAMMALN.PRECISE(-1) | NORM.DIST(42,40,0,TRUE) | NORM.INV(0,40,1.5) | NORM.S.INV(1) | POISSON.DIST(-1,5,TRUE) |
-    T.DIST.2T(-1,60) | TDIST(-1,60,2) | TINV(0.05,0) | WEIBULL.DIST(-1,20,100,TRUE) | BIN2DEC(2) | CONVERT(1,"kg","m") | DEC2BIN(512) | HEX2DEC("G")`),
+    BASE(7,1) | DECIMAL("2",2) | BITAND(-1,5) | IMABS("x") | IMARGUMENT("0") | IMDIV("1","0") | T.DIST.2T(-1,60) | TDIST(-1,60,2) | TINV(0.05,0) | WEIBULL.DIST(-1,20,100,TRUE) | BIN2DEC(2) | CONVERT(1,"kg","m") | DEC2BIN(512) | HEX2DEC("G")`),
   ...each('LibreOffice calls a division by zero #NUM! here', 'COT(0) | COTH(0) | CSC(0) | CSCH(0) | POWER(0,-1)'),
   ...each(REASONS.boolean, `
     SUM(mixed) | SUMSQ(mixed) | VAR(mixed) | VAR.S(mixed) | VAR.P(mixed) | COUNT(mixed) | STDEV(mixed) | STDEV.S(mixed) | STDEV.P(mixed) |
@@ -28,6 +28,9 @@ export const disagreements: ReadonlyMap<string, string> = new Map([
     PRODUCT(2,"3",TRUE) | SUM(1,"3",TRUE) | AVERAGE(1,"3") | MAX(1,"9",TRUE)`),
   ...each('#NUM! by the vendor\'s documentation, for the argument is outside the distribution', `
     EXPON.DIST(-1,10,TRUE) | GAMMADIST(-1,9,2,TRUE) | LOGNORMDIST(0,3.5,1.2) | STANDARDIZE(42,40,0)`),
+  ...each('a negative numeral is read, by the vendor\'s documentation', 'ARABIC("-IV")'),
+  ...each('an en-US workbook writes a negative amount in brackets', 'DOLLAR(-1234.567)'),
+  ...each('#NUM! by the vendor\'s documentation: a rate must be above 0, flows must have both signs', 'EFFECT(0,4) | IRR({1,2})'),
   ...each('cut off, not rounded, to its digits: the vendor\'s documentation gives 0.666 for two thirds', `
     PERCENTRANK.EXC(nums,5) | PERCENTRANK(nums,6) | PERCENTRANK.INC(nums,6) | PERCENTRANK(nums,6,5)`),
   ...each('one way to choose nothing of nothing (from memory)', 'COMBINA(0,0)'),

@@ -18,6 +18,14 @@ export const dateSpans: Native[] = [
     if (a === undefined || b === undefined || !(basis >= 0 && basis <= 4)) return stepped(run, undefined, from);
     return stepped(run, a === b ? 0 : yearFraction(Math.min(a, b), Math.max(a, b), basis), from);
   }, { args: [2, 3] }),
+  scalarFunction('DAYS360', ['scalar', 'scalar', 'boolean'], (run, args) => {
+    const [start, end] = args.slice(0, 2).map((s) => toDate(run, 'DAYS360', s ?? BLANK));
+    if (start.k === 'error') return start;
+    if (end.k === 'error') return end;
+    const [a, b] = [start, end].map((s) => serialIn('DAYS360', s));
+    if (a === undefined || b === undefined) return stepped(run, undefined, [start, end]);
+    return stepped(run, commercialDays(dayOf(a), dayOf(b), args[2]?.v === true), [start, end, ...(args[2] ? [args[2]] : [])]);
+  }, { args: [2, 3] }),
   scalarFunction('DATEDIF', ['scalar', 'scalar', 'scalar'], dateDif),
 ];
 
@@ -55,6 +63,14 @@ function days360(a: Day, b: Day): number {
     if (to === 31) to = 30;
   }
   return thirties({ ...a, day: from }, { ...b, day: to });
+}
+
+/** DAYS360: day 31 counts as 30; by the way of the United States, as the first of the next month after a day below 30. Ends of February are refused there. */
+function commercialDays(a: Day, b: Day, european: boolean): number {
+  const from = Math.min(a.day, 30);
+  if (european) return thirties({ ...a, day: from }, { ...b, day: Math.min(b.day, 30) });
+  if (isEndOfFebruary(a) || isEndOfFebruary(b)) refuseUse('DAYS360', 'a date is the end of February');
+  return thirties({ ...a, day: from }, { ...b, day: b.day === 31 && from === 30 ? 30 : b.day });
 }
 
 const thirties = (a: Day, b: Day): number => (b.year - a.year) * 360 + (b.month - a.month) * 30 + b.day - a.day;

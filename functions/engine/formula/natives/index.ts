@@ -1,10 +1,12 @@
 import type { Native } from '../native';
 import { addresses } from './addresses';
 import { allValues } from './allValues';
+import { bases } from './bases';
 import { betaFamily } from './betaFamily';
 import { characters } from './characters';
 import { choices } from './choices';
 import { combinatorics } from './combinatorics';
+import { complexNumbers } from './complexNumbers';
 import { conditionalSums } from './conditionalSums';
 import { conversions } from './conversions';
 import { convert } from './convert';
@@ -15,6 +17,7 @@ import { elementary } from './elementary';
 import { engineering } from './engineering';
 import { errorFunction } from './errorFunction';
 import { filtering } from './filtering';
+import { finance } from './finance';
 import { gammaFamily } from './gammaFamily';
 import { hypothesisTests } from './hypothesisTests';
 import { information } from './information';
@@ -32,6 +35,7 @@ import { quantiles } from './quantiles';
 import { rankings } from './rankings';
 import { ranks } from './ranks';
 import { references } from './references';
+import { regressions } from './regressions';
 import { rounding } from './rounding';
 import { shaping } from './shaping';
 import { sorting } from './sorting';
@@ -49,12 +53,12 @@ import { writtenNumbers } from './writtenNumbers';
 
 const table = new Map<string, Native>(
   [
-    ...addresses, ...allValues, ...betaFamily, ...characters, ...choices, ...combinatorics, ...conditionalSums, ...conversions,
-    ...convert, ...counts, ...dates, ...dateSpans, ...elementary, ...engineering, ...errorFunction, ...filtering,
-    ...gammaFamily, ...hypothesisTests, ...information, ...lambdas, ...linest, ...logic, ...lookups, ...matrices, ...means,
-    ...moments, ...multiples, ...normalFamily, ...pairSums, ...quantiles, ...rankings, ...ranks, ...references, ...rounding,
-    ...shaping, ...sorting, ...spread, ...standardized, ...straightLine, ...sums, ...textPieces, ...texts, ...tFamily,
-    ...times, ...trigonometry, ...workdays, ...writtenNumbers,
+    ...addresses, ...allValues, ...bases, ...betaFamily, ...characters, ...choices, ...combinatorics, ...complexNumbers,
+    ...conditionalSums, ...conversions, ...convert, ...counts, ...dates, ...dateSpans, ...elementary, ...engineering,
+    ...errorFunction, ...filtering, ...finance, ...gammaFamily, ...hypothesisTests, ...information, ...lambdas, ...linest,
+    ...logic, ...lookups, ...matrices, ...means, ...moments, ...multiples, ...normalFamily, ...pairSums, ...quantiles,
+    ...rankings, ...ranks, ...references, ...regressions, ...rounding, ...shaping, ...sorting, ...spread, ...standardized,
+    ...straightLine, ...sums, ...textPieces, ...texts, ...tFamily, ...times, ...trigonometry, ...workdays, ...writtenNumbers,
   ].map((native) => [native.name, native]),
 );
 

@@ -27,6 +27,8 @@ export const multiples: Native[] = [
   }),
   scalarFunction('CEILING.MATH', ['number', 'number', 'number'], (run, args) => towards(run, 'CEILING.MATH', args, Math.ceil), { args: [1, 3] }),
   scalarFunction('FLOOR.MATH', ['number', 'number', 'number'], (run, args) => towards(run, 'FLOOR.MATH', args, Math.floor), { args: [1, 3] }),
+  ...['CEILING.PRECISE', 'ISO.CEILING'].map((name) => scalarFunction(name, ['number', 'number'], (run, args) => towards(run, name, args, Math.ceil), { args: [1, 2] })),
+  scalarFunction('FLOOR.PRECISE', ['number', 'number'], (run, args) => towards(run, 'FLOOR.PRECISE', args, Math.floor), { args: [1, 2] }),
   scalarFunction('EVEN', ['number'], (run, [a]) => awayFromZero(run, numberOf(a), (size) => 2 * Math.ceil(size / 2))),
   scalarFunction('ODD', ['number'], (run, [a]) => awayFromZero(run, numberOf(a), (size) => 2 * Math.ceil(Math.max(0, size - 1) / 2) + 1)),
   strictFunction('QUOTIENT', ['number', 'number'], (run, args) => {

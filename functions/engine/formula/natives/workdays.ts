@@ -17,40 +17,77 @@ export const workdays: Native[] = [
     if ('k' in free) return free;
     const [a, b] = [start, end].map((s) => serialIn('NETWORKDAYS', s));
     if (a === undefined || b === undefined) return stepped(run, undefined, args as Num[]);
-    const count = between(Math.min(a, b), Math.max(a, b), free.days);
+    const count = between(Math.min(a, b), Math.max(a, b), free.days, SATURDAY_SUNDAY);
     return stepped(run, a <= b || count === 0 ? count : -count, [start, end, ...free.from]);
   }, { args: [2, 3] }),
+  international('NETWORKDAYS.INTL', (run, [start, end], free, weekend, by) => {
+    const [a, b] = [start, end].map((s) => serialIn('NETWORKDAYS.INTL', s));
+    if (a === undefined || b === undefined) return stepped(run, undefined, by);
+    const count = between(Math.min(a, b), Math.max(a, b), free, weekend);
+    return stepped(run, a <= b || count === 0 ? count : -count, by);
+  }),
+  international('WORKDAY.INTL', (run, [start, days], free, weekend, by) => {
+    const from = serialIn('WORKDAY.INTL', start);
+    return stepped(run, from === undefined ? undefined : later(from, wholeOf('WORKDAY.INTL', days.v), free, weekend), by);
+  }),
   strictFunction('WORKDAY', ['date', 'number', 'whole range'], (run, args, [given]) => {
     const [start, days] = args as Num[];
     const free = holidays(run, 'WORKDAY', given);
     if ('k' in free) return free;
     const from = serialIn('WORKDAY', start);
     const count = wholeOf('WORKDAY', days.v);
-    return stepped(run, from === undefined ? undefined : later(from, count, free.days), [start, days, ...free.from]);
+    return stepped(run, from === undefined ? undefined : later(from, count, free.days, SATURDAY_SUNDAY), [start, days, ...free.from]);
   }, { args: [2, 3] }),
 ];
 
-const isWeekend = (serial: number): boolean => weekdayOf(serial) >= 5;
+/** A function of two numbers or dates, a weekend and holidays. A number that is no weekend is #NUM!, text #VALUE!. */
+function international(
+  name: string, of: (run: Run, pair: readonly [Num, Num], free: ReadonlySet<number>, weekend: Weekend, by: readonly Scalar[]) => Scalar,
+): Native {
+  return strictFunction(name, ['date', 'date', 'whole range', 'whole range'], (run, args, [given, days]) => {
+    const pair = args as unknown as readonly [Num, Num];
+    const free = holidays(run, name, days);
+    if ('k' in free) return free;
+    const code = given === undefined || given.k === 'missing' ? undefined : run.scalar(given);
+    if (code?.k === 'error') return code;
+    const weekend = code === undefined ? SATURDAY_SUNDAY : weekendOf(code);
+    if (weekend === undefined) return run.steps.error(code!.k === 'text' ? '#VALUE!' : '#NUM!', code!);
+    return of(run, pair, free.days, weekend, [...pair, ...(code ? [code] : []), ...free.from]);
+  }, { args: [2, 4] });
+}
+
+/** The days of the week that are free, Monday 0. */
+type Weekend = ReadonlySet<number>;
+
+const SATURDAY_SUNDAY: Weekend = new Set([5, 6]);
 
 /** The working days from one day to another, both included. */
-function between(first: number, last: number, free: ReadonlySet<number>): number {
+function between(first: number, last: number, free: ReadonlySet<number>, weekend: Weekend): number {
   const weeks = Math.floor((last - first + 1) / 7);
-  let count = weeks * 5;
-  for (let day = first + weeks * 7; day <= last; day++) if (!isWeekend(day)) count++;
-  for (const day of free) if (day >= first && day <= last && !isWeekend(day)) count--;
+  let count = weeks * (7 - weekend.size);
+  for (let day = first + weeks * 7; day <= last; day++) if (!weekend.has(weekdayOf(day))) count++;
+  for (const day of free) if (day >= first && day <= last && !weekend.has(weekdayOf(day))) count--;
   return count;
 }
 
 /** The working day so many working days later or earlier; undefined where it lies outside the calendar. */
-function later(from: number, count: number, free: ReadonlySet<number>): number | undefined {
+function later(from: number, count: number, free: ReadonlySet<number>, weekend: Weekend): number | undefined {
   const step = Math.sign(count);
   let day = from;
   for (let left = Math.abs(count); left > 0;) {
     day += step;
     if (day < 0 || day > LAST_DAY) return undefined;
-    if (!isWeekend(day) && !free.has(day)) left--;
+    if (!weekend.has(weekdayOf(day)) && !free.has(day)) left--;
   }
   return day;
+}
+
+/** A weekend by its number (1 to 7 two days, 11 to 17 one) or by seven digits from Monday on; undefined where it is none. */
+function weekendOf(given: Scalar): Weekend | undefined {
+  if (given.k === 'text') return /^[01]{7}$/.test(given.v) && given.v !== '1111111' ? new Set([...given.v].flatMap((c, day) => (c === '1' ? [day] : []))) : undefined;
+  const code = given.k === 'number' ? Math.trunc(given.v) : NaN;
+  if (code >= 1 && code <= 7) return new Set([(code + 4) % 7, (code + 5) % 7]);
+  return code >= 11 && code <= 17 ? new Set([(code - 12 + 7) % 7]) : undefined;
 }
 
 /** The days of a range of holidays, and the scalars they depend on; blank cells are passed over. */

@@ -8,13 +8,16 @@ import { strictFunction } from './strictFunction';
 import { made } from './texts';
 import { wholeOf } from './wholeOf';
 
-/** Numbers written as text and read back: FIXED, NUMBERVALUE, and binary and hexadecimal notation in ten places. */
+/** Numbers written as text and read back: FIXED, DOLLAR, NUMBERVALUE, and binary, octal and hexadecimal notation in ten places. */
 export const writtenNumbers: Native[] = [
   scalarFunction('FIXED', ['number', 'number', 'boolean'], fixed, { args: [1, 3] }),
+  scalarFunction('DOLLAR', ['number', 'number'], dollar, { args: [1, 2] }),
   scalarFunction('NUMBERVALUE', ['text', 'text', 'text'], numberValue, { args: [1, 3] }),
   written('DEC2BIN', 2),
+  written('DEC2OCT', 8),
   written('DEC2HEX', 16),
   read('BIN2DEC', 2),
+  read('OCT2DEC', 8),
   read('HEX2DEC', 16),
 ];
 
@@ -28,6 +31,14 @@ function fixed(run: Run, args: readonly (Scalar | undefined)[]): Scalar {
   const [, sign, whole, rest] = /^(-?)(\d+)(.*)$/.exec(shown)!;
   const grouped = plain?.k === 'boolean' && plain.v ? whole : whole.replace(/\B(?=(\d{3})+$)/g, ',');
   return made(run, sign + grouped + rest, [x, ...(digits ? [digits] : []), ...(plain ? [plain] : [])]);
+}
+
+/** DOLLAR(x, [places = 2]): like FIXED with the sign of the dollar, negative amounts in brackets, as an en-US workbook has it. */
+function dollar(run: Run, args: readonly (Scalar | undefined)[]): Scalar {
+  const found = fixed(run, args);
+  if (found.k !== 'text') return found;
+  const amount = found.v.replace(/^-/, '');
+  return { ...found, v: found.v.startsWith('-') ? `($${amount})` : `$${amount}` };
 }
 
 const READABLE = /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i;
@@ -51,32 +62,45 @@ function numberValue(run: Run, args: readonly (Scalar | undefined)[]): Scalar {
   return run.steps.chosen(run.steps.fromText(Number(digits) / 100 ** percents.length, s), ...by.slice(1));
 }
 
-/** So many digits of notation with base 2 or 16, negative numbers as their complement. */
+/** So many digits of notation with base 2, 8 or 16, negative numbers as their complement. */
 const PLACES = 10;
 
-/** DEC2BIN and DEC2HEX(number, [places]). Negative numbers take all ten places. */
-function written(name: string, base: 2 | 16): Native {
+type Base = 2 | 8 | 16;
+
+/** The digits of a whole number; undefined (#NUM!) where it does not fit. Negative numbers take all ten places. */
+export function digitsIn(name: string, base: Base, n: number, places: Num | undefined): string | undefined {
+  const half = base ** PLACES / 2;
+  if (n < -half || n >= half) return undefined;
+  const digits = (n < 0 ? n + 2 * half : n).toString(base).toUpperCase();
+  const width = places === undefined ? digits.length : wholeOf(name, places.v);
+  if (width < 1 || width > PLACES || (n >= 0 && width < digits.length)) {
+    if (n < 0) refuseUse(name, 'its number of places is unusual');
+    return undefined;
+  }
+  return n < 0 ? digits : digits.padStart(width, '0');
+}
+
+/** The number that up to ten digits mean, the first of ten telling a negative one; undefined where they are none. */
+export function numberIn(base: Base, digits: string): number | undefined {
+  if (!{ 2: /^[01]{0,10}$/, 8: /^[0-7]{0,10}$/, 16: /^[0-9a-f]{0,10}$/i }[base].test(digits)) return undefined;
+  const n = digits === '' ? 0 : parseInt(digits, base);
+  return n >= base ** PLACES / 2 ? n - base ** PLACES : n;
+}
+
+/** DEC2BIN, DEC2OCT and DEC2HEX(number, [places]). */
+function written(name: string, base: Base): Native {
   return strictFunction(name, ['number', 'number'], (run, args) => {
     const [x, places] = args as Num[];
-    const n = Math.abs(x.v) < 1 ? 0 : wholeOf(name, x.v);
-    const half = base ** PLACES / 2;
-    if (n < -half || n >= half) return run.steps.error('#NUM!', ...(args as Num[]));
-    const digits = (n < 0 ? n + 2 * half : n).toString(base).toUpperCase();
-    const width = places === undefined ? digits.length : wholeOf(name, places.v);
-    if (width < 1 || width > PLACES || (n >= 0 && width < digits.length)) {
-      if (n < 0) refuseUse(name, 'its number of places is unusual');
-      return run.steps.error('#NUM!', ...(args as Num[]));
-    }
-    return made(run, n < 0 ? digits : digits.padStart(width, '0'), args as Num[]);
+    const digits = digitsIn(name, base, Math.abs(x.v) < 1 ? 0 : wholeOf(name, x.v), places);
+    return digits === undefined ? run.steps.error('#NUM!', ...(args as Num[])) : made(run, digits, args as Num[]);
   }, { args: [1, 2] });
 }
 
-/** BIN2DEC and HEX2DEC: up to ten digits, the first of ten telling a negative number. */
-function read(name: string, base: 2 | 16): Native {
+/** BIN2DEC, OCT2DEC and HEX2DEC. */
+function read(name: string, base: Base): Native {
   return strictFunction(name, ['text'], (run, args) => {
     const s = args[0] as Text;
-    if (!(base === 2 ? /^[01]{0,10}$/ : /^[0-9a-f]{0,10}$/i).test(s.v)) return run.steps.error('#NUM!', s);
-    const n = s.v === '' ? 0 : parseInt(s.v, base);
-    return run.steps.fromText(n >= base ** PLACES / 2 ? n - base ** PLACES : n, s);
+    const n = numberIn(base, s.v);
+    return n === undefined ? run.steps.error('#NUM!', s) : run.steps.fromText(n, s);
   });
 }

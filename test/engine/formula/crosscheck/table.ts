@@ -78,6 +78,10 @@ export const smoothTable: readonly Row[] = [
   ...[1, 2].flatMap((i) => [1, 2].map((j) => row('LINEST', `=INDEX(LINEST(A1:A7,B1:C7,FALSE,TRUE),${i},${j})`, planePoints))),
   ...[1, 2, 3].map((j) => row('LINEST', `=INDEX(LINEST(A1:F1,A2:F3),1,${j})`, acrossPoints)),
 
+  row('TREND', '=INDEX(TREND(A1:A7,B1:B7,D1),1)', (from) => ({ ...linePoints(from), D1: from.between(2, 9) })),
+  row('TREND', '=INDEX(TREND(A1:A7,B1:C7),3)', planePoints), line('TREND', '=INDEX(TREND(A1:A7,B1:B7,,FALSE()),2)'),
+  row('GROWTH', '=INDEX(GROWTH(A1:A7,B1:B7,D1),1)', (from) => ({ ...linePoints(from), D1: from.between(2, 9) })),
+  ...[1, 2].map((j) => line('LOGEST', `=INDEX(LOGEST(A1:A7,B1:B7),1,${j})`)),
   row('MMULT', '=SUMSQ(MMULT(A1:C2,D1:E3))', { ...block('ABC', 2, [1, 9]), ...block('DE', 3, [1, 9]) }),
   row('MMULT', '=SUM(MMULT(A1:C1,D1:D3))', { ...block('ABC', 1, [1, 9]), ...block('D', 3, [1, 9]) }),
   ...[1, 2, 3].map((n) => row('MDETERM', `=MDETERM(A1:${'ABC'[n - 1]}${n})`, (from) => dominant(from, n))),
