@@ -20,7 +20,7 @@ export const disagreements: ReadonlyMap<string, string> = new Map([
     CHISQ.INV(1.5,2) | CHISQ.INV.RT(0.5,0) | EXPONDIST(0.2,0,TRUE) | F.INV.RT(0,6,4) | FDIST(-1,6,4) | GAMMA(0) | GAMMAINV(2,9,2) |
     GAMMALN(0) | GAMMALN.PRECISE(-1) | NORM.DIST(42,40,0,TRUE) | NORM.INV(0,40,1.5) | NORM.S.INV(1) | POISSON.DIST(-1,5,TRUE) |
     BASE(7,1) | DECIMAL("2",2) | BITAND(-1,5) | IMABS("x") | IMARGUMENT("0") | IMDIV("1","0") | T.DIST.2T(-1,60) | TDIST(-1,60,2) | TINV(0.05,0) | WEIBULL.DIST(-1,20,100,TRUE) | BIN2DEC(2) | CONVERT(1,"kg","m") | DEC2BIN(512) | HEX2DEC("G")`),
-  ...each('LibreOffice calls a division by zero #NUM! here', 'COT(0) | COTH(0) | CSC(0) | CSCH(0) | POWER(0,-1)'),
+  ...each('LibreOffice calls a division by zero #NUM! here', 'DSTDEV(table,"size",wanted) | DVAR(table,"size",wanted) | COT(0) | COTH(0) | CSC(0) | CSCH(0) | POWER(0,-1)'),
   ...each(REASONS.boolean, `
     SUM(mixed) | SUMSQ(mixed) | VAR(mixed) | VAR.S(mixed) | VAR.P(mixed) | COUNT(mixed) | STDEV(mixed) | STDEV.S(mixed) | STDEV.P(mixed) |
     AVERAGE(mixed) | AVEDEV(mixed) | DEVSQ(mixed) | TYPE(TRUE) | CONCAT("a",1,TRUE) | CONCATENATE("a",1,TRUE) | LOWER(TRUE) | TEXTJOIN("-",FALSE,mixed)`),

@@ -17,14 +17,15 @@ export const bases: Native[] = [
     return made(run, n.toString(radix).toUpperCase().padStart(width, '0'), from);
   }, { args: [2, 3] }),
   scalarFunction('DECIMAL', ['text', 'number'], (run, [s, radix]) => {
+    if (s === undefined || radix === undefined) return refuseUse('DECIMAL', 'an argument is left empty');
     const base = Math.trunc(numberOf(radix).v);
-    const written = (s as Text | undefined)?.v ?? '';
-    if (base < 2 || base > 36) return run.steps.error('#NUM!', s!, radix!);
+    const written = (s as Text).v;
+    if (base < 2 || base > 36) return run.steps.error('#NUM!', s, radix);
     const digits = [...written.trim().toLowerCase()].map((c) => (/[0-9a-z]/.test(c) ? parseInt(c, 36) : 99));
     if (digits.length === 0) refuseUse('DECIMAL', 'its text is empty');
-    if (digits.some((d) => d >= base)) return run.steps.error('#NUM!', s!, radix!);
+    if (digits.some((d) => d >= base)) return run.steps.error('#NUM!', s, radix);
     const value = digits.reduce((sum, d) => sum * base + d, 0);
-    return value < 2 ** 53 ? run.steps.fromText(value, s as Text) : run.steps.error('#NUM!', s!);
+    return value < 2 ** 53 ? run.steps.fromText(value, s as Text) : run.steps.error('#NUM!', s);
   }),
   scalarFunction('ROMAN', ['number', 'scalar'], (run, args) => {
     const x = numberOf(args[0]);

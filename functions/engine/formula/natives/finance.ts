@@ -36,6 +36,7 @@ export const finance: Native[] = [
   ofNumbers('SYD', 4, 4, ([cost, salvage, life, period]) =>
     (life > 0 && salvage >= 0 && period >= 1 && period <= life ? [((cost - salvage) * (life - period + 1) * 2) / (life * (life + 1))] : '#NUM!')),
   ofNumbers('DDB', 4, 5, ([cost, salvage, life, period, factor]) => doubleDeclining(cost, salvage, life, period, or(factor, 2))),
+  ofNumbers('DB', 4, 5, ([cost, salvage, life, period, month]) => fixedDeclining(cost, salvage, life, period, or(month, 12))),
   ofNumbers('EFFECT', 2, 2, ([nominal, periods]) => {
     const n = Math.trunc(periods);
     return nominal > 0 && n >= 1 ? [Math.expm1(n * Math.log1p(nominal / n))] : '#NUM!';
@@ -97,6 +98,20 @@ function doubleDeclining(cost: number, salvage: number, life: number, period: nu
   let lost = 0;
   for (let k = 1; k <= period; k++) {
     lost = Math.max(0, Math.min(left * Math.min(1, factor / life), left - salvage));
+    left -= lost;
+  }
+  return [lost];
+}
+
+/** DB: the rate is rounded to three decimal places; the first year may have fewer than twelve months, the rest follow at the end. */
+function fixedDeclining(cost: number, salvage: number, life: number, period: number, month: number): WithSlopes {
+  if (cost < 0 || salvage < 0 || !(life > 0) || period < 1 || month < 1 || month > 12 || period > life + (month < 12 ? 1 : 0)) return '#NUM!';
+  if (![life, period, month].every(Number.isInteger) || cost === 0) refuseUse('DB', 'its periods are not whole, or it costs nothing');
+  const rate = Math.round((1 - (salvage / cost) ** (1 / life)) * 1000) / 1000;
+  let left = cost;
+  let lost = 0;
+  for (let k = 1; k <= period; k++) {
+    lost = left * rate * (k === 1 ? month / 12 : k === life + 1 ? (12 - month) / 12 : 1);
     left -= lost;
   }
   return [lost];

@@ -11,6 +11,7 @@ import { conditionalSums } from './conditionalSums';
 import { conversions } from './conversions';
 import { convert } from './convert';
 import { counts } from './counts';
+import { databases } from './databases';
 import { dates } from './dates';
 import { dateSpans } from './dateSpans';
 import { elementary } from './elementary';
@@ -54,11 +55,12 @@ import { writtenNumbers } from './writtenNumbers';
 const table = new Map<string, Native>(
   [
     ...addresses, ...allValues, ...bases, ...betaFamily, ...characters, ...choices, ...combinatorics, ...complexNumbers,
-    ...conditionalSums, ...conversions, ...convert, ...counts, ...dates, ...dateSpans, ...elementary, ...engineering,
-    ...errorFunction, ...filtering, ...finance, ...gammaFamily, ...hypothesisTests, ...information, ...lambdas, ...linest,
-    ...logic, ...lookups, ...matrices, ...means, ...moments, ...multiples, ...normalFamily, ...pairSums, ...quantiles,
-    ...rankings, ...ranks, ...references, ...regressions, ...rounding, ...shaping, ...sorting, ...spread, ...standardized,
-    ...straightLine, ...sums, ...textPieces, ...texts, ...tFamily, ...times, ...trigonometry, ...workdays, ...writtenNumbers,
+    ...conditionalSums, ...conversions, ...convert, ...counts, ...databases, ...dates, ...dateSpans, ...elementary,
+    ...engineering, ...errorFunction, ...filtering, ...finance, ...gammaFamily, ...hypothesisTests, ...information, ...lambdas,
+    ...linest, ...logic, ...lookups, ...matrices, ...means, ...moments, ...multiples, ...normalFamily, ...pairSums,
+    ...quantiles, ...rankings, ...ranks, ...references, ...regressions, ...rounding, ...shaping, ...sorting, ...spread,
+    ...standardized, ...straightLine, ...sums, ...textPieces, ...texts, ...tFamily, ...times, ...trigonometry, ...workdays,
+    ...writtenNumbers,
   ].map((native) => [native.name, native]),
 );
 
