@@ -21,6 +21,7 @@ export interface FormulaReads {
 }
 
 const REFERENCE_MAKERS = new Set(['OFFSET', 'INDIRECT']);
+const STRETCHES = new Set(['SUMIF', 'AVERAGEIF']);
 
 /**
  * The references of a formula at a cell. Of a spill, `A1#`, it is the anchor alone: who asks for dependents of a spill asks for those of
@@ -91,10 +92,16 @@ export function formulaReads(program: Program, place: CellPlace, around: Surroun
       case 'host':
         callsHost = true;
         return e.args.forEach(visit);
-      case 'call':
-        return e.args.forEach(visit);
+      case 'call': {
+        const before = areas.length;
+        e.args.forEach(visit);
+        if (REFERENCE_MAKERS.has(e.native.name)) unforeseen = true;
+        // SUMIF gives its last range the size of its first.
+        const [first, ...others] = areas.slice(before);
+        if (STRETCHES.has(e.native.name) && e.args[2] && others.some((a) => a.r2 - a.r1 !== first.r2 - first.r1 || a.c2 - a.c1 !== first.c2 - first.c1)) unforeseen = true;
+        return;
+      }
       case 'apply':
-        if (e.callee.k === 'name' && REFERENCE_MAKERS.has(e.callee.name.toUpperCase())) unforeseen = true;
         visit(e.callee);
         return e.args.forEach(visit);
       case 'let':

@@ -62,6 +62,15 @@ describe('native formulas', () => {
     expect(refusals(await desk.recalculate())).toEqual([]);
     expect([shown(desk, 'B1'), shown(desk, 'C1')]).toEqual([10, 15]);
   });
+
+  it('are computed when a cell changed that only OFFSET or the stretched range of SUMIF reaches', async () => {
+    const desk = deskOn({
+      A1: 1, A2: 1, B1: 1, B2: { f: 'A2*10', v: 10 }, C1: { f: 'OFFSET(A1,1,1)', v: 10 }, C2: { f: 'SUMIF(A1:A2,">0",B1)', v: 11 }, D1: { f: 'C1+C2', v: 21 },
+    });
+    desk.working.setConstant(0, 2, 1, 3);
+    expect(refusals(await desk.recalculate())).toEqual([]);
+    expect(['C1', 'C2', 'D1'].map((cell) => shown(desk, cell))).toEqual([30, 31, 61]);
+  });
 });
 
 it('a workbook with precision as displayed is refused', () => {
