@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { formulaOn } from '../../engine/formula/formulaOn';
 import { type Argument, callOn } from './callOn';
 import { memoryPort } from './memoryPort';
 
@@ -167,5 +168,17 @@ describe('twenty thousand rows', () => {
     expect(us).toHaveLength(20000);
     const r = 20000;
     expect(us[r - 1][0]).toBeCloseTo(Math.hypot(0.1 * (0.02 + 0.5 / Math.sqrt(r)), 0.001 * r), 12);
+  });
+});
+
+describe('functions with a value but without a slope', () => {
+  it.each([
+    ['=T.DIST.2T(2,B1)', 5], ['=B1*YEAR(B1+40000)', 5], ['=CEILING(B1,0.5)', 5.2], ['=PMT(B1/100,12,1000)', 5], ['=PERCENTRANK(E1:E3,B1)', 2],
+  ])('%s of an uncertain number is refused with words', async (formula, value) => {
+    const stored = formulaOn({ B1: value, E1: 1, E2: 2, E3: 4 }, formula).value as number;
+    const port = memoryPort({ S: { B1: value, E1: 1, E2: 2, E3: 4, D1: formula } });
+    const [[shown]] = await callOn(port, 'UNC_CARRY', ['S!D1'], ['S!B1', { literal: 0.1 }]);
+    expect(Number.isFinite(stored)).toBe(true);
+    expect(shown).toMatch(/^#VALUE! .*D1.*slope/);
   });
 });

@@ -46,6 +46,7 @@ import { straightLine } from './straightLine';
 import { sums } from './sums';
 import { textPieces } from './textPieces';
 import { texts } from './texts';
+import { textSplit } from './textSplit';
 import { tFamily } from './tFamily';
 import { times } from './times';
 import { trigonometry } from './trigonometry';
@@ -59,8 +60,8 @@ const table = new Map<string, Native>(
     ...engineering, ...errorFunction, ...filtering, ...finance, ...gammaFamily, ...hypothesisTests, ...information, ...lambdas,
     ...linest, ...logic, ...lookups, ...matrices, ...means, ...moments, ...multiples, ...normalFamily, ...pairSums,
     ...quantiles, ...rankings, ...ranks, ...references, ...regressions, ...rounding, ...shaping, ...sorting, ...spread,
-    ...standardized, ...straightLine, ...sums, ...textPieces, ...texts, ...tFamily, ...times, ...trigonometry, ...workdays,
-    ...writtenNumbers,
+    ...standardized, ...straightLine, ...sums, ...textPieces, ...texts, ...textSplit, ...tFamily, ...times, ...trigonometry,
+    ...workdays, ...writtenNumbers,
   ].map((native) => [native.name, native]),
 );
 
