@@ -3,6 +3,7 @@ import { carryFamily } from './families/carry';
 import { combinationFunctions } from './families/combination';
 import { coverageFunctions } from './families/coverage';
 import { decisionFunctions } from './families/decision';
+import { precisionFunctions } from './families/precision';
 import { proofFunctions } from './families/proof';
 import { roundingFunctions } from './families/rounding';
 import { significantFigureFunctions } from './families/significantFigures';
@@ -11,6 +12,7 @@ import { standardUncertaintyFunctions } from './families/standardUncertainty';
 /** Every worksheet function: the single source of truth for metadata, argument checking, help and tables. */
 export const registry: readonly Declaration[] = [
   ...standardUncertaintyFunctions,
+  ...precisionFunctions,
   ...combinationFunctions,
   ...carryFamily,
   ...roundingFunctions,
