@@ -1,6 +1,8 @@
 import { each } from '../declaration';
 import { pairStyles, pairText } from '../engine/report/pairText';
+import { readPair } from '../engine/report/readPair';
 import { pairRules, roundPair } from '../engine/report/roundPair';
+import { refusal } from '../errors';
 import { choice, number, oneNumber, text } from '../parameters';
 
 const family = 'Report and decide';
@@ -44,5 +46,18 @@ export const roundingFunctions = [
     },
     result: 'text',
     body: ({ value, stdu, style, digits, unit, k }, { decimalSeparator }) => pairText(value, stdu, { style, digits, unit, k, decimalSeparator }),
+  }),
+  each({
+    name: 'UNC_READ',
+    family,
+    help: 'Reads a value with its uncertainty from text: 12.10 ± 0.05, 12.10(5), (12.10 ± 0.12) mg/L, k = 2.',
+    parameters: { text: text({ help: 'Value with its uncertainty as written; decimal point or comma' }) },
+    result: 'value, ± as written, k, u',
+    columns: () => 4,
+    body: ({ text }) => {
+      const { value, half, k } = readPair(text);
+      const u = k === undefined ? refusal('the text states no k, so u cannot be told; divide the ± by its coverage factor') : half / k;
+      return [value, half, k ?? '', half === 0 ? 'exact' : u];
+    },
   }),
 ];

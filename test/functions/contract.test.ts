@@ -30,6 +30,7 @@ const working: Record<string, Given[]> = {
   UNC_COMBINE: [[0.3, 0.4], [1, 2], [[1, 0.5], [0.5, 1]], true],
   UNC_ROUND: [[1, 2], [0.1, 0.2], 1, 'up'],
   UNC_TEXT: [[1, 2], [0.1, 0.2], 'plusminus', 1, 'mg', 2],
+  UNC_READ: [['12.10 ± 0.12, k = 2', '12.10(5)']],
   UNC_EXPAND: [[1, 2], 0.95, 9],
   UNC_FACTOR: [[0.9, 0.95], 9, 't'],
   UNC_CONFORM: [[1, 2], [0.1, 0.2], -1, 'none', 9],
