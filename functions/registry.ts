@@ -3,6 +3,7 @@ import { carryFamily } from './families/carry';
 import { combinationFunctions } from './families/combination';
 import { coverageFunctions } from './families/coverage';
 import { decisionFunctions } from './families/decision';
+import { glasswareFunctions } from './families/glassware';
 import { precisionFunctions } from './families/precision';
 import { proofFunctions } from './families/proof';
 import { roundingFunctions } from './families/rounding';
@@ -13,6 +14,7 @@ import { standardUncertaintyFunctions } from './families/standardUncertainty';
 export const registry: readonly Declaration[] = [
   ...standardUncertaintyFunctions,
   ...precisionFunctions,
+  ...glasswareFunctions,
   ...combinationFunctions,
   ...carryFamily,
   ...roundingFunctions,

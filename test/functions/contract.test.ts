@@ -27,6 +27,7 @@ const working: Record<string, Given[]> = {
   STDU_FROM_TEMP: [[10, 20], 4, 3e-4, 'triangular', true],
   SPEC_TOL: [[1, 2], 0.001, 10, 0.0001, 0.01, 2],
   SD_POOL: [[0.1, 0.2], [4, 9]],
+  GLASS_TOL: ['burette', [50, 100], 'B', 'ISO', [0.1, 0.2], true],
   UNC_COMBINE: [[0.3, 0.4], [1, 2], [[1, 0.5], [0.5, 1]], true],
   UNC_ROUND: [[1, 2], [0.1, 0.2], 1, 'up'],
   UNC_TEXT: [[1, 2], [0.1, 0.2], 'plusminus', 1, 'mg', 2],
