@@ -54,8 +54,8 @@ export const roundingFunctions = [
     parameters: { text: text({ help: 'Value with its uncertainty as written; decimal point or comma' }) },
     result: 'value, ± as written, k, u',
     columns: () => 4,
-    body: ({ text }) => {
-      const { value, half, k } = readPair(text);
+    body: ({ text }, { decimalSeparator }) => {
+      const { value, half, k } = readPair(text, decimalSeparator);
       const u = k === undefined ? refusal('the text states no k, so u cannot be told; divide the ± by its coverage factor') : half / k;
       return [value, half, k ?? '', half === 0 ? 'exact' : u];
     },

@@ -19,6 +19,10 @@ const BRACKETS = new RegExp(`^(${NUMBER})\\((\\d+(?:[.,]\\d+)?)\\)${POWER}(.*)$`
 const PLUS_MINUS = new RegExp(`^(${NUMBER}?)${POWER}\\s*(?:±|\\+\\/-|\\+-)\\s*(${NUMBER})${POWER}\\s*(%?)(.*)$`);
 const OUTER = /^\((.*?(?:±|\+\/-|\+-).*?)\)(.*)$/;
 const ALONE = new RegExp(`^(${NUMBER})${POWER}(.*)\\(exact\\)$`);
+/** A value whose comma may separate thousands, and a comma elsewhere that cannot. */
+const GROUPED = /^\(?[+-]?\s*[1-9]\d{0,2},\d{3}(?![\d,])/;
+const DECIMAL_COMMA = /(?<![\d.])0,\d|\d,(?:\d{1,2}|\d{4,})(?!\d)/;
+
 /** What is left beside the numbers and cannot be a unit. */
 const NO_UNIT = /±|\+\/-|^[\d.,(]/;
 
@@ -29,12 +33,15 @@ const COVERAGE = /[,;]?\s*\(?\s*k\s*=\s*(\d+(?:[.,]\d+)?)\s*\)?\s*$/;
  * k = 2`, `(1.210 ± 0.005) × 10³`, `12.1 ± 2 %` (of the value), `6.022 140 76e23 (exact)`; decimal point or comma, spaces between
  * groups of digits.
  *
+ * @param separator   The user's decimal separator. Where it is a point, `1,234 ± 5` may mean 1234 as well and is refused.
  * @throws   EngineError "text" for text that is none of these.
  * @source   JCGM 100:2008, 7.2.2 and 7.2.4; the notation of CODATA's tables.
  * @example  readPair('12.10(5)').half // 0.05
  */
-export function readPair(written: string): WrittenPair {
+export function readPair(written: string, separator: '.' | ',' = '.'): WrittenPair {
   const plain = written.trim().replace(/[\u2212\u2013]/g, '-');
+  if (separator === '.' && GROUPED.test(plain) && !DECIMAL_COMMA.test(plain))
+    throw new EngineError('text', `readPair needs a value whose comma is surely a decimal comma, got "${written}"`);
   const exact = ALONE.exec(plain);
   if (exact) return { value: numberOf(exact[1], powerOf(exact, 2)), half: 0, k: 1, unit: exact[5].trim() };
   const stated = COVERAGE.exec(plain);

@@ -40,7 +40,7 @@ describe('readPair', () => {
       for (const style of ['plusminus', 'brackets', 'scientific'] as const) {
         for (const decimalSeparator of ['.', ','] as const) {
           const text = pairText(value, u, { style, decimalSeparator, unit: i % 2 ? 'mg/L' : '', k: style !== 'brackets' && i % 3 === 0 ? 2 : undefined });
-          const { value: v, half, k, unit } = readPair(text);
+          const { value: v, half, k, unit } = readPair(text, decimalSeparator);
           const again = style === 'brackets' ? half : half / (k ?? 1);
           expect(Math.abs(again / u - 1), text).toBeLessThan(0.06);
           expect(Math.abs(v - value), text).toBeLessThanOrEqual(u);
@@ -48,6 +48,14 @@ describe('readPair', () => {
         }
       }
     }
+  });
+
+  it('refuses a comma that may separate thousands, unless another comma or the user\'s settings decide', () => {
+    expect(() => readPair('1,234 ± 5')).toThrow('needs a value whose comma is surely a decimal comma, got "1,234 ± 5"');
+    expect(() => readPair('1,234(5)')).toThrow('surely a decimal comma');
+    expect(readPair('1,234 ± 0,005').value).toBe(1.234);
+    expect(readPair('1,234(5)', ',').value).toBe(1.234);
+    expect(readPair('12,34 ± 5').value).toBe(12.34);
   });
 
   it.each(['', '12.10', 'abc', '± 0.05', '12 ± -1', '12.10()', '12.10(0)', '12(5) ± 1', '12.10(5), k = 2'])('"%s" is refused', (text) => {
