@@ -2,7 +2,8 @@ import { numberText } from '../numberText';
 import type { Native } from '../native';
 import type { Run } from '../run';
 import type { Num, Scalar, Text } from '../scalar';
-import { strictFunction } from './strictFunction';
+import { refuseUse } from './refuseUse';
+import { severalCells, strictFunction } from './strictFunction';
 import { made } from './texts';
 
 interface Complex {
@@ -39,8 +40,8 @@ export const complexNumbers: Native[] = [
     const size = b.re * b.re + b.im * b.im;
     return size === 0 ? undefined : [(a.re * b.re + a.im * b.im) / size, (a.im * b.re - a.re * b.im) / size];
   }),
-  pair('IMSUM', (a, b) => [a.re + b.re, a.im + b.im], 255),
-  pair('IMPRODUCT', (a, b) => [a.re * b.re - a.im * b.im, a.re * b.im + a.im * b.re], 255),
+  oneByOne(pair('IMSUM', (a, b) => [a.re + b.re, a.im + b.im], 255)),
+  oneByOne(pair('IMPRODUCT', (a, b) => [a.re * b.re - a.im * b.im, a.re * b.im + a.im * b.re], 255)),
 ];
 
 const NUMBER = String.raw`(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?`;
@@ -107,4 +108,15 @@ function pair(name: string, value: (a: Complex, b: Complex) => [number, number] 
     }
     return result(run, [sum.re, sum.im], unit, args as Scalar[]);
   }, { args: [most === 2 ? 2 : 1, most], repeating: 1 });
+}
+
+/** The same function, refused for several numbers in one argument: the sheet takes ranges there, by rules that are not documented. */
+function oneByOne(native: Native): Native {
+  return {
+    ...native,
+    body: (run, args) => {
+      if (args.some((a) => a.k === 'matrix' || severalCells(run, a))) refuseUse(native.name, 'an argument holds several numbers');
+      return native.body(run, args);
+    },
+  };
 }

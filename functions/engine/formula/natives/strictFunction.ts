@@ -46,7 +46,8 @@ export function strictFunction(
   }, { ...arity, shareable: false });
 }
 
-function severalCells(run: Run, a: Value): boolean {
+/** Whether an argument is a reference to more than one cell. */
+export function severalCells(run: Run, a: Value): boolean {
   if (a.k !== 'area' && a.k !== 'union') return false;
   const size = sizeOf(run, a);
   return size === undefined || size.rows * size.cols > 1;

@@ -28,6 +28,7 @@ export const workdays: Native[] = [
   }),
   international('WORKDAY.INTL', (run, [start, days], free, weekend, by) => {
     const from = serialIn('WORKDAY.INTL', start);
+    if (weekend.size === 7) return run.steps.error('#VALUE!', ...by);
     return stepped(run, from === undefined ? undefined : later(from, wholeOf('WORKDAY.INTL', days.v), free, weekend), by);
   }),
   strictFunction('WORKDAY', ['date', 'number', 'whole range'], (run, args, [given]) => {
@@ -82,9 +83,9 @@ function later(from: number, count: number, free: ReadonlySet<number>, weekend: 
   return day;
 }
 
-/** A weekend by its number (1 to 7 two days, 11 to 17 one) or by seven digits from Monday on; undefined where it is none. */
+/** A weekend by its number (1 to 7 two days, 11 to 17 one) or by seven digits from Monday on, all seven allowed; undefined where it is none. */
 function weekendOf(given: Scalar): Weekend | undefined {
-  if (given.k === 'text') return /^[01]{7}$/.test(given.v) && given.v !== '1111111' ? new Set([...given.v].flatMap((c, day) => (c === '1' ? [day] : []))) : undefined;
+  if (given.k === 'text') return /^[01]{7}$/.test(given.v) ? new Set([...given.v].flatMap((c, day) => (c === '1' ? [day] : []))) : undefined;
   const code = given.k === 'number' ? Math.trunc(given.v) : NaN;
   if (code >= 1 && code <= 7) return new Set([(code + 4) % 7, (code + 5) % 7]);
   return code >= 11 && code <= 17 ? new Set([(code - 12 + 7) % 7]) : undefined;

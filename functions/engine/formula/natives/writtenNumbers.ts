@@ -10,7 +10,7 @@ import { wholeOf } from './wholeOf';
 
 /** Numbers written as text and read back: FIXED, DOLLAR, NUMBERVALUE, and binary, octal and hexadecimal notation in ten places. */
 export const writtenNumbers: Native[] = [
-  scalarFunction('FIXED', ['number', 'number', 'boolean'], fixed, { args: [1, 3] }),
+  scalarFunction('FIXED', ['number', 'number', 'boolean'], (run, args) => fixed(run, args), { args: [1, 3] }),
   scalarFunction('DOLLAR', ['number', 'number'], dollar, { args: [1, 2] }),
   scalarFunction('NUMBERVALUE', ['text', 'text', 'text'], numberValue, { args: [1, 3] }),
   written('DEC2BIN', 2),
@@ -22,12 +22,13 @@ export const writtenNumbers: Native[] = [
 ];
 
 /** FIXED(x, [places = 2], [no commas]): rounded half away from zero in decimal; a negative number of places rounds to tens. */
-function fixed(run: Run, args: readonly (Scalar | undefined)[]): Scalar {
-  if (args.length > 1 && args[1] === undefined) refuseUse('FIXED', 'an argument is left empty');
+function fixed(run: Run, args: readonly (Scalar | undefined)[], name = 'FIXED'): Scalar {
+  if (args.length > 1 && args[1] === undefined) refuseUse(name, 'an argument is left empty');
   const [x, digits, plain] = [numberOf(args[0]), args[1] as Num | undefined, args[2]];
   const places = Math.trunc(digits?.v ?? 2);
   if (places > 127) return run.steps.error('#VALUE!', x, digits!);
   const shown = formatPlaces(x.v, Math.max(places, -400), 'halfUp');
+  if (x.v < 0 && !/[1-9]/.test(shown)) refuseUse(name, 'a negative number is rounded to 0');
   const [, sign, whole, rest] = /^(-?)(\d+)(.*)$/.exec(shown)!;
   const grouped = plain?.k === 'boolean' && plain.v ? whole : whole.replace(/\B(?=(\d{3})+$)/g, ',');
   return made(run, sign + grouped + rest, [x, ...(digits ? [digits] : []), ...(plain ? [plain] : [])]);
@@ -35,7 +36,7 @@ function fixed(run: Run, args: readonly (Scalar | undefined)[]): Scalar {
 
 /** DOLLAR(x, [places = 2]): like FIXED with the sign of the dollar, negative amounts in brackets, as an en-US workbook has it. */
 function dollar(run: Run, args: readonly (Scalar | undefined)[]): Scalar {
-  const found = fixed(run, args);
+  const found = fixed(run, args, 'DOLLAR');
   if (found.k !== 'text') return found;
   const amount = found.v.replace(/^-/, '');
   return { ...found, v: found.v.startsWith('-') ? `($${amount})` : `$${amount}` };
