@@ -9,6 +9,8 @@ export interface WorkbookPort {
   sheets(): Promise<readonly PortSheet[]>;
   names(): Promise<readonly PortName[]>;
   tables(): Promise<readonly PortTable[]>;
+  /** The rows of a sheet that do not show. */
+  hiddenRows(sheet: string): Promise<readonly PortHiddenRow[]>;
   /** The cells of rectangles, each as asked for; what lies outside the used part is blank. */
   read(areas: readonly PortArea[]): Promise<readonly PortTile[]>;
 }
@@ -18,6 +20,12 @@ export interface PortSheet {
   /** Last row and column that may hold something; 0 on an empty sheet. */
   readonly rows: number;
   readonly cols: number;
+}
+
+export interface PortHiddenRow {
+  readonly row: number;
+  /** True where a filter in force leaves the row out; false where it was hidden by hand. */
+  readonly filtered: boolean;
 }
 
 /** A defined name; `sheet` where it is local to one. */

@@ -1,4 +1,5 @@
 import type { TableShape } from '../engine/formula/evaluate';
+import type { HiddenRows } from '../engine/formula/rowState';
 import type { Area } from '../engine/formula/value';
 import type { CellContent, WorkbookView } from '../engine/graph/workbookView';
 import type { PortArea, PortName, PortTable, WorkbookPort } from '../workbook';
@@ -13,6 +14,8 @@ export class Snapshot implements WorkbookView {
   private readonly places = new Map<string, number>();
   private readonly known = new Set<string>();
   private readonly wanted = new Map<string, PortArea>();
+  private readonly hidden = new Map<number, HiddenRows>();
+  private readonly hiddenWanted = new Set<number>();
   private readonly underWay = new Set<Promise<void>>();
 
   private constructor(
@@ -41,6 +44,17 @@ export class Snapshot implements WorkbookView {
     return this.columns[sheet].get(col)?.[row];
   }
 
+  formula(sheet: number, row: number, col: number): string | null | undefined {
+    const content = this.cell(sheet, row, col);
+    return content && (content.formula ?? null);
+  }
+
+  hiddenRows(sheet: number): HiddenRows | undefined {
+    const known = this.hidden.get(sheet);
+    if (!known) this.hiddenWanted.add(sheet);
+    return known;
+  }
+
   want(area: Area): void {
     const { rows, cols, name } = this.sheets[area.sheet];
     const lastRow = Math.min(area.r2, rows);
@@ -66,8 +80,8 @@ export class Snapshot implements WorkbookView {
    * @returns false if there was neither.
    */
   async fetch(): Promise<boolean> {
-    if (this.wanted.size > 0) {
-      const reading = this.readWanted().finally(() => this.underWay.delete(reading));
+    if (this.wanted.size + this.hiddenWanted.size > 0) {
+      const reading = Promise.all([this.readWanted(), this.readHidden()]).then(() => {}).finally(() => this.underWay.delete(reading));
       this.underWay.add(reading);
     }
     if (this.underWay.size === 0) return false;
@@ -75,7 +89,17 @@ export class Snapshot implements WorkbookView {
     return true;
   }
 
+  private async readHidden(): Promise<void> {
+    const sheets = [...this.hiddenWanted];
+    this.hiddenWanted.clear();
+    await Promise.all(sheets.map(async (sheet) => {
+      const rows = await this.port.hiddenRows(this.sheets[sheet].name);
+      this.hidden.set(sheet, new Map(rows.map(({ row, filtered }) => [row, filtered ? 'filtered' : 'hidden'])));
+    }));
+  }
+
   private async readWanted(): Promise<void> {
+    if (this.wanted.size === 0) return;
     const areas = [...this.wanted.values()];
     for (const key of this.wanted.keys()) this.known.add(key);
     this.wanted.clear();

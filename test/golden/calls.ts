@@ -79,10 +79,12 @@ const families: Readonly<Record<string, string>> = {
     TAN: 0.785
     TANH: 0.5
     TRUNC: 8.9 | -8.9 | 3.14159,3 | 123.4,-2
-    AGGREGATE: 9,4,nums | 14,6,nums,2
-    SUBTOTAL: 9,nums | 1,nums | 5,nums
+    AGGREGATE: 9,4,nums | 14,6,nums,2 | 15,6,bad,1 | 9,6,bad | 9,4,bad | 12,4,nums | 13,4,nums | 16,4,nums,0.3 | 17,4,nums,1 | 18,4,nums,0.3 | 19,4,nums,1 | 20,4,nums | 1,8,nums
+    SUBTOTAL: 9,nums | 1,nums | 5,nums | 2,mixed | 3,mixed | 4,nums | 6,nums | 7,nums | 8,nums | 10,nums | 11,nums | 109,nums | 12,nums | 0,nums
     ERF: 0.745 | 0.2,1 | -1
     ERFC: 1 | 4 | -0.5
+    ERF.PRECISE: 0.745 | -1
+    ERFC.PRECISE: 1 | 4 | -0.5
     DELTA: 5,4 | 5,5 | 0
     GESTEP: 5,4 | -4,-5 | -1`,
   statistics: `
@@ -232,11 +234,12 @@ const families: Readonly<Record<string, string>> = {
   lookups: `
     ADDRESS: 2,3 | 2,3,2 | 2,3,3,TRUE,"Two words" | 0,1 | 2,3,2,FALSE
     AREAS: nums | (nums,other)
+    CELL: "row",nums | "col",nums | "contents",nums | "type",words | "type",nums
     CHOOSE: 2,10,20,30 | 2.9,10,20,30 | 4,10,20,30
     COLUMN: other | Data!C7
     COLUMNS: square | nums
     HLOOKUP: 3,{1,3,5;"a","b","c"},2 | 4,{1,3,5;"a","b","c"},2 | 4,{1,3,5;"a","b","c"},2,FALSE | 0,{1,3;2,4},1
-    INDEX: nums,3 | square,2,3 | nums,9 | square,2,4
+    INDEX: nums,3 | square,2,3 | nums,9 | square,2,4 | LOGEST(counts,sorted,TRUE,TRUE),1,1 | LOGEST(counts,sorted,TRUE,TRUE),2,1 | LOGEST(counts,sorted,TRUE,TRUE),2,2 | LOGEST(counts,sorted,TRUE,TRUE),3,1 | LOGEST(counts,sorted,TRUE,TRUE),3,2 | LOGEST(counts,sorted,TRUE,TRUE),4,1 | LOGEST(counts,sorted,TRUE,TRUE),5,2
     INDIRECT: "Data!A3" | "Data!R3C1",FALSE | "nowhere!A1" | "Data!A"&2
     LOOKUP: 5,sorted | 5,sorted,counts | 0,sorted | "fig",{"apple","fig","pear"},{1,2,3}
     MATCH: 5,sorted | 5,sorted,0 | 4,sorted,0 | "*ple*",words,0 | 5,{9,7,5,3},-1 | 0,sorted
@@ -267,6 +270,7 @@ const families: Readonly<Record<string, string>> = {
     ISNUMBER: 1 | "1" | Data!A1
     ISODD: 4 | 3.9 | -1
     ISREF: nums | 1
+    ISFORMULA: INDEX(nums,1)
     ISTEXT: "a" | 1 | Data!D1
     N: 7 | TRUE | "x" | Data!A2
     NA: 
@@ -377,6 +381,12 @@ const families: Readonly<Record<string, string>> = {
     MIRR: {-120000,39000,30000,21000,37000,46000},0.1,0.12
     NOMINAL: 0.053543,4
     NPER: 0.01,-100,-1000,10000,1 | 0,-100,1000
+    ISPMT: 0.1,1,36,8000000
+    DOLLARDE: 1.02,16 | 1.1,32 | 1,0
+    DOLLARFR: 1.125,16 | 1.125,32
+    FVSCHEDULE: 1,{0.09,0.11,0.1}
+    XNPV: 0.09,{-10000,2750,4250,3250,2750},{39448,39508,39751,39859,39904} | -0.5,{-1,2},{1,2}
+    XIRR: {-10000,2750,4250,3250,2750},{39448,39508,39751,39859,39904} | {1,2},{1,2}
     NPV: 0.1,-10000,3000,4200,6800 | 0.1,nums
     PMT: 0.00667,10,10000 | 0,10,10000
     PPMT: 0.00833,1,24,2000

@@ -12,7 +12,7 @@ export const disagreements: ReadonlyMap<string, string> = new Map([
     MEDIAN(words) | PEARSON(nums,sorted) | RSQ(nums,sorted) | SLOPE(nums,sorted) | SMALL(nums,0) | SMALL(nums,9) | STEYX(nums,sorted) |
     INDEX(nums,9) | INDEX(square,2,4) | OFFSET(Data!A1,-1,0) | DATE(-1,1,1) | DATEDIF(45292,36526,"D") | TIME(-1,0,0) | WEEKDAY(45292,9) |
     COMBIN(2,3) | COMBINA(2,-1) | FACT(-1) | FACT(171) | FACTDOUBLE(-2) | MULTINOMIAL(-1,2) | SUMX2MY2(nums,sorted) | SUMX2PY2(nums,sorted) |
-    SUMXMY2(nums,sorted) | CONFIDENCE(0,2.5,50) | CONFIDENCE.NORM(0.05,-1,50) | COVAR(nums,sorted) | COVARIANCE.P(nums,sorted) |
+    AGGREGATE(15,6,bad,1) | DOLLARDE(1,0) | XIRR({1,2},{1,2}) | SUMXMY2(nums,sorted) | CONFIDENCE(0,2.5,50) | CONFIDENCE.NORM(0.05,-1,50) | COVAR(nums,sorted) | COVARIANCE.P(nums,sorted) |
     COVARIANCE.S(nums,sorted) | FISHER(1) | GEOMEAN(nums) | HARMEAN(nums) | MODE(other) | MODE.SNGL(other) | PERCENTILE(nums,1.1) |
     PERCENTILE.EXC(nums,0.01) | PERCENTILE.EXC(nums,1) | PERCENTILE.INC(nums,-1) | PERCENTRANK(nums,99) | PERCENTRANK.EXC(nums,99) |
     PERMUT(2,3) | PERMUTATIONA(-1,2) | PROB({0,1},{0.2,0.3},1) | QUARTILE(nums,5) | QUARTILE.EXC(nums,4) |
@@ -20,9 +20,10 @@ export const disagreements: ReadonlyMap<string, string> = new Map([
     CHISQ.INV(1.5,2) | CHISQ.INV.RT(0.5,0) | EXPONDIST(0.2,0,TRUE) | F.INV.RT(0,6,4) | FDIST(-1,6,4) | GAMMA(0) | GAMMAINV(2,9,2) |
     GAMMALN(0) | GAMMALN.PRECISE(-1) | NORM.DIST(42,40,0,TRUE) | NORM.INV(0,40,1.5) | NORM.S.INV(1) | POISSON.DIST(-1,5,TRUE) |
     BASE(7,1) | DECIMAL("2",2) | BITAND(-1,5) | IMABS("x") | IMARGUMENT("0") | IMDIV("1","0") | T.DIST.2T(-1,60) | TDIST(-1,60,2) | TINV(0.05,0) | WEIBULL.DIST(-1,20,100,TRUE) | BIN2DEC(2) | CONVERT(1,"kg","m") | DEC2BIN(512) | HEX2DEC("G")`),
+  ...each('#NUM! by the vendor\'s documentation: the rate must be above 0', 'XNPV(-0.5,{-1,2},{1,2})'),
   ...each('LibreOffice calls a division by zero #NUM! here', 'DSTDEV(table,"size",wanted) | DVAR(table,"size",wanted) | COT(0) | COTH(0) | CSC(0) | CSCH(0) | POWER(0,-1)'),
   ...each(REASONS.boolean, `
-    SUM(mixed) | SUMSQ(mixed) | VAR(mixed) | VAR.S(mixed) | VAR.P(mixed) | COUNT(mixed) | STDEV(mixed) | STDEV.S(mixed) | STDEV.P(mixed) |
+    SUBTOTAL(2,mixed) | SUM(mixed) | SUMSQ(mixed) | VAR(mixed) | VAR.S(mixed) | VAR.P(mixed) | COUNT(mixed) | STDEV(mixed) | STDEV.S(mixed) | STDEV.P(mixed) |
     AVERAGE(mixed) | AVEDEV(mixed) | DEVSQ(mixed) | TYPE(TRUE) | CONCAT("a",1,TRUE) | CONCATENATE("a",1,TRUE) | LOWER(TRUE) | TEXTJOIN("-",FALSE,mixed)`),
   ...each('text given as an argument is read as a number; LibreOffice does so only where it is told to', `
     PRODUCT(2,"3",TRUE) | SUM(1,"3",TRUE) | AVERAGE(1,"3") | MAX(1,"9",TRUE)`),

@@ -47,6 +47,8 @@ export class Book {
   /** False: "precision as displayed", so that stored values are rounded ones. */
   readonly fullPrecision: boolean;
 
+  private readonly hidden = new Map<number, ReadonlyMap<number, 'hidden' | 'filtered'>>();
+
   constructor(readonly source: BookSource) {
     const { workbook } = source;
     this.sheets = workbook.sheets.map(({ name, part, kind, state }, index) =>
@@ -100,6 +102,20 @@ export class Book {
   /** Whether cells of this style hide their formula once their sheet is protected. */
   isHiddenStyle(style: number): boolean {
     return this.source.styles.hidden[style] ?? false;
+  }
+
+  /** The rows that do not show. Inside the area of a filter that is in force every hidden row counts as left out by it. */
+  hiddenRows(sheet: number): ReadonlyMap<number, 'hidden' | 'filtered'> {
+    const known = this.hidden.get(sheet);
+    if (known) return known;
+    const data = this.data(sheet);
+    const filters = [...(data?.filters ?? []), ...this.tables.flatMap((t) => (t.sheet === sheet && t.filter ? [t.filter] : []))];
+    const rows = new Map<number, 'hidden' | 'filtered'>();
+    for (const { row, hidden } of data?.rows ?? []) {
+      if (hidden) rows.set(row, filters.some(({ top, bottom }) => row > top && row <= bottom) ? 'filtered' : 'hidden');
+    }
+    this.hidden.set(sheet, rows);
+    return rows;
   }
 
   private data(sheet: number): SheetData | undefined {

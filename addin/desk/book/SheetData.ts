@@ -9,6 +9,7 @@ export interface RowRecord {
   cells: BookCell[];
   /** Style that empty cells of the row take, if the row has one. */
   style?: number;
+  hidden?: boolean;
 }
 
 /** A shared formula: the cells that hold it, and how to write it for one of them. */
@@ -29,6 +30,8 @@ export interface SheetData {
   dataTables: Area[];
   shared: SharedGroup[];
   merges: Area[];
+  /** Areas of filters that are in force: with a condition on some column. Tables keep their own. */
+  filters: Area[];
   columnStyles: { first: number; last: number; style: number }[];
   protected: boolean;
   mainUri: string;

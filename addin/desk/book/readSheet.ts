@@ -34,14 +34,19 @@ export function readSheet(text: string, context: SheetContext): SheetData {
   return reader.finish();
 }
 
+/** What a filter column holds when it leaves rows out; without one it only says whether its button shows. */
+const FILTER_CONDITIONS = new Set(['filters', 'customFilters', 'top10', 'dynamicFilter', 'colorFilter', 'iconFilter']);
+
 class SheetReader {
   private readonly sheet: SheetData = {
-    rows: [], byRow: new Map(), arrays: [], dataTables: [], shared: [], merges: [], columnStyles: [], protected: false, mainUri: '',
+    rows: [], byRow: new Map(), arrays: [], dataTables: [], shared: [], merges: [], filters: [], columnStyles: [], protected: false, mainUri: '',
   };
   private readonly owners = new Map<string, SharedGroup>();
   private readonly orphans: { si: string; key: number; cell: BookCell }[] = [];
   private depth = 0;
   private inData = false;
+  /** The area of the filter that is being read, as long as no condition in it was met. */
+  private filter: string | undefined;
   private record: RowRecord | undefined;
   private row = 0;
   private col = 0;
@@ -77,7 +82,8 @@ class SheetReader {
       if (tag.local === 'rPh') this.phonetic--;
       else if (this.depth === 3 && tag.local === 'c') this.closeCell();
       else if (tag.local === 'f' || tag.local === 'v' || tag.local === 't') this.collecting = undefined;
-    } else if (this.depth === 1 && tag.local === 'sheetData') this.inData = false;
+    } else if (this.depth === 1 && tag.local === 'autoFilter') this.filter = undefined;
+    else if (this.depth === 1 && tag.local === 'sheetData') this.inData = false;
     else if (this.depth === 2 && this.inData) this.record = undefined;
   };
 
@@ -106,7 +112,11 @@ class SheetReader {
     const value = (name: string): string | undefined => tag.attributes[name]?.value;
     if (this.depth === 2 && tag.local === 'sheetData') this.inData = true;
     else if (this.depth === 2 && tag.local === 'sheetProtection') this.sheet.protected = isTrue(value('sheet'));
-    else if (this.depth === 3 && tag.local === 'mergeCell') this.sheet.merges.push(parseArea(value('ref') ?? '', `${this.context.part} mergeCell`));
+    else if (this.depth === 2 && tag.local === 'autoFilter') this.filter = value('ref');
+    else if (this.depth === 4 && this.filter !== undefined && FILTER_CONDITIONS.has(tag.local)) {
+      this.sheet.filters.push(parseArea(this.filter, `${this.context.part} autoFilter`));
+      this.filter = undefined;
+    } else if (this.depth === 3 && tag.local === 'mergeCell') this.sheet.merges.push(parseArea(value('ref') ?? '', `${this.context.part} mergeCell`));
     else if (this.depth === 3 && tag.local === 'col' && value('style') !== undefined) {
       this.sheet.columnStyles.push({ first: Number(value('min')), last: Number(value('max')), style: Number(value('style')) });
     }
@@ -120,6 +130,7 @@ class SheetReader {
     this.col = 0;
     this.record = { row, cols: [], cells: [] };
     if (isTrue(tag.attributes.customFormat?.value)) this.record.style = Number(tag.attributes.s?.value ?? 0);
+    if (isTrue(tag.attributes.hidden?.value)) this.record.hidden = true;
     this.sheet.rows.push(this.record);
     this.sheet.byRow.set(row, this.record);
   }

@@ -12,6 +12,8 @@ export interface BookTable {
   columns: string[];
   headerRows: number;
   totalsRows: number;
+  /** The area of its filter, if that is in force. */
+  filter?: Area;
 }
 
 /** A table and the part that holds it. */
@@ -23,6 +25,8 @@ export interface StoredTable extends BookTable {
 
 export function readTable(text: string, part: string, sheet: number): StoredTable {
   const root = parseXml(text, part);
+  const filter = childOf(root, 'autoFilter');
+  const filtered = childrenOf(filter, 'filterColumn').some((column) => column.children.length > 0) ? attribute(filter!, 'ref') : undefined;
   return {
     part, sheet,
     name: decodeXstring(attribute(root, 'displayName') ?? attribute(root, 'name') ?? ''),
@@ -31,5 +35,6 @@ export function readTable(text: string, part: string, sheet: number): StoredTabl
     columns: childrenOf(childOf(root, 'tableColumns'), 'tableColumn').map((column) => decodeXstring(attribute(column, 'name') ?? '')),
     headerRows: Number(attribute(root, 'headerRowCount') ?? 1),
     totalsRows: Number(attribute(root, 'totalsRowCount') ?? 0),
+    ...(filtered !== undefined && { filter: parseArea(filtered, `part ${part}`) }),
   };
 }

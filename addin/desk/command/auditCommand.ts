@@ -53,7 +53,8 @@ function auditLines(path: string, result: Audit): string[] {
     lines.push(...cut(unsupported.map((u) => `    ${u.function}  in ${u.cells.length === 1 ? u.cells[0] : `${u.cells.length} cells, the first ${u.cells[0]}`}`)));
   }
   if (refused.length > 0) lines.push('  Cells that cannot be followed', ...cut(refused.map((r) => `    ${r.cell} ${r.why}`)));
-  if (differ.length + unread === 0) lines.push('  Every formula is read right: results of this workbook can be carried');
+  if (unstored > 0) lines.push('  Formulas without a stored result have nothing to be compared with: recalculate, in the program that wrote the workbook or by `rootsum recalc`');
+  if (differ.length + unread === 0 && agree > 0) lines.push(`  Every ${unstored > 0 ? 'stored result' : 'formula'} is read right: results of this workbook can be carried`);
   return lines;
 }
 

@@ -1,4 +1,5 @@
 import type { CellContent, WorkbookView } from '../../../functions/engine/graph/workbookView';
+import type { HiddenRows } from '../../../functions/engine/formula/rowState';
 import type { TableShape } from '../../../functions/engine/formula/evaluate';
 import { placeKey } from './places';
 import { isSpillError } from './values';
@@ -31,6 +32,14 @@ export class GraphView implements WorkbookView {
     const relative = this.working.relativeFormula(placeKey(sheet, row, col), cell);
     if (!array) return { value, formula: relative, implicit: true };
     return { value, formula: array.dynamic ? `=${SPILL_MARK}(${relative.slice(1)})` : relative, array };
+  }
+
+  formula(sheet: number, row: number, col: number): string | null {
+    return this.working.formulaAt(sheet, row, col) ?? null;
+  }
+
+  hiddenRows(sheet: number): HiddenRows {
+    return this.working.hiddenRows(sheet);
   }
 
   /** Everything is there: nothing is ever asked for. */

@@ -1,4 +1,5 @@
 import type { Cells, TableShape } from '../../../functions/engine/formula/evaluate';
+import type { RowState } from '../../../functions/engine/formula/rowState';
 import type { Program } from '../../../functions/engine/formula/expression';
 import { EngineError } from '../../../functions/engine/EngineError';
 import { constant } from '../../../functions/engine/graph/cellGraph';
@@ -52,6 +53,14 @@ export class StoredCells implements Cells {
 
   used(sheet: number): { rows: number; cols: number } {
     return this.working.used(sheet);
+  }
+
+  rowState(sheet: number, row: number): RowState {
+    return this.working.hiddenRows(sheet).get(row) ?? 'shown';
+  }
+
+  formulaAt(sheet: number, row: number, col: number): string | undefined {
+    return this.working.formulaAt(sheet, row, col);
   }
 
   sheetIndex(name: string): number | undefined {

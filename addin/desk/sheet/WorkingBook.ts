@@ -5,6 +5,7 @@ import type { Book } from '../book/Book';
 import type { BookCell, CellValue } from '../book/BookCell';
 import type { StyleRequest } from '../book/Edit';
 import { isOccupied } from '../book/SheetData';
+import type { HiddenRows } from '../../../functions/engine/formula/rowState';
 import type { TableShape } from '../../../functions/engine/formula/evaluate';
 import type { CellPlace } from '../../../functions/engine/graph/cellGraph';
 import { typedFormula } from './functionNames';
@@ -102,6 +103,17 @@ export class WorkingBook {
     const relative = this.relative(cell.formula!, row, col);
     this.r1c1.set(key, { stored: cell.formula!, relative });
     return relative;
+  }
+
+  /** The relative formula that stands in a cell, if one does. */
+  formulaAt(sheet: number, row: number, col: number): string | undefined {
+    const cell = this.cell(sheet, row, col);
+    return cell?.formula === undefined ? undefined : this.relativeFormula(placeKey(sheet, row, col), cell);
+  }
+
+  /** The rows of a sheet that do not show. */
+  hiddenRows(sheet: number): HiddenRows {
+    return this.book.hiddenRows(sheet);
   }
 
   /** The formula (R1C1, relative to A1) of a name seen from a sheet. */

@@ -14,6 +14,7 @@ export function bookPort(working: WorkingBook): WorkbookPort {
       ({ name, formula, ...(sheet !== undefined && { sheet: working.sheetName(sheet) }) })),
     tables: async (): Promise<PortTable[]> => book.tables.map(({ name, sheet, ref, columns, headerRows, totalsRows }) =>
       ({ name, area: area(sheet, ref.top, ref.left, ref.bottom, ref.right), columns, headerRows, totalsRows })),
+    hiddenRows: async (sheet) => [...(working.hiddenRows(working.sheetIndex(sheet)!))].map(([row, state]) => ({ row, filtered: state === 'filtered' })),
     read: async (areas): Promise<PortTile[]> => areas.map((asked) => ({ area: asked, cells: cellsOf(working, asked) })),
   };
 }

@@ -40,6 +40,12 @@ export function formulaReads(program: Program, place: CellPlace, around: Surroun
   };
   const sheetOf = (r: RelativeArea): number | undefined => (r.sheet === undefined ? place.sheet : around.sheetIndex(r.sheet));
 
+  const addTable = (name: string, columns: readonly string[], sections: readonly string[]): void => {
+    const table = around.table(name, place.sheet, place.row, place.col);
+    const area = table && tableArea(table, columns, sections, place.row);
+    if (area) areas.push(area);
+  };
+
   const visit = (e: Expression | null): void => {
     if (!e) return;
     switch (e.k) {
@@ -53,17 +59,14 @@ export function formulaReads(program: Program, place: CellPlace, around: Surroun
         for (let sheet = Math.min(first, last); sheet <= Math.max(first, last); sheet++) add(e.reference, sheet);
         return;
       }
-      case 'table': {
-        const table = around.table(e.table, place.sheet, place.row, place.col);
-        const area = table && tableArea(table, e.columns, e.sections, place.row);
-        if (area) areas.push(area);
-        return;
-      }
+      case 'table':
+        return addTable(e.table, e.columns, e.sections);
       case 'name': {
         const sheet = e.sheet === undefined ? place.sheet : around.sheetIndex(e.sheet);
         const key = `${sheet}!${e.name.toLowerCase()}`;
-        const named = sheet === undefined || open.has(key) ? undefined : around.nameProgram(e.name, sheet);
-        if (!named) return;
+        if (sheet === undefined || open.has(key)) return;
+        const named = around.nameProgram(e.name, sheet);
+        if (!named) return addTable(e.name, [], []);
         open.add(key);
         visit(named.root);
         open.delete(key);

@@ -258,7 +258,7 @@ function* readsOf(e: Expression | null): Generator<RelativeArea> {
 }
 
 /** Functions that look at where a reference lies, or at a small part of it: reading all of it beforehand could make a circle. */
-const READS_NO_VALUES = new Set(['ROW', 'ROWS', 'COLUMN', 'COLUMNS', 'INDEX', 'OFFSET', 'INDIRECT', 'AREAS', 'CELL', 'SHEET']);
+const READS_NO_VALUES = new Set(['ROW', 'ROWS', 'COLUMN', 'COLUMNS', 'INDEX', 'OFFSET', 'INDIRECT', 'AREAS', 'CELL', 'ISFORMULA']);
 
 /** Number literals that stand in the arithmetic of an expression: operands, and arguments of functions that sum or multiply. */
 function* literalsOf(e: Expression | null, arithmetic: boolean): Generator<string> {

@@ -3,6 +3,7 @@ import { toBool, toNumber, toText } from './coerce';
 import type { BinaryOperator, Bound, Expression, Program, RelativeArea } from './expression';
 import { kindAt, type Lazy, type Native, type ParameterKind } from './native';
 import { binary } from './operators';
+import type { RowState } from './rowState';
 import type { Run } from './run';
 import { type Scalar, BLANK, NONE, err, num } from './scalar';
 import { Steps } from './steps';
@@ -24,6 +25,9 @@ export interface Cells {
   cell(sheet: number, row: number, col: number): Scalar;
   read(area: Area): Matrix;
   used(sheet: number): { rows: number; cols: number };
+  rowState(sheet: number, row: number): RowState;
+  /** The formula (R1C1, with its `=`) that stands in a cell, if one does. */
+  formulaAt(sheet: number, row: number, col: number): string | undefined;
   sheetIndex(name: string): number | undefined;
   /** A defined name seen from a sheet: its formula, compiled. */
   name(name: string, sheet: number): Program | undefined;
@@ -143,6 +147,14 @@ export class Evaluator implements Run {
 
   used(sheet: number): { rows: number; cols: number } {
     return this.cells.used(sheet);
+  }
+
+  rowState(sheet: number, row: number): RowState {
+    return this.cells.rowState(sheet, row);
+  }
+
+  formulaAt(sheet: number, row: number, col: number): string | undefined {
+    return this.cells.formulaAt(sheet, row, col);
   }
 
   sheetNamed(name: string): number | undefined {
@@ -410,7 +422,7 @@ export class Evaluator implements Run {
     const home = sheet === undefined ? this.sheet : this.cells.sheetIndex(sheet);
     if (home === undefined) return err('#REF!');
     const program = this.cells.name(name, home);
-    if (!program) return err('#NAME?');
+    if (!program) return this.cells.table(name, home, this.row, this.col) ? this.tablePart(name, [], []) : err('#NAME?'); // a table's bare name is its data
     const scope = this.scope;
     this.scope = undefined;
     try {

@@ -1,4 +1,5 @@
 import type { ParameterKind } from './native';
+import type { RowState } from './rowState';
 import type { Scalar } from './scalar';
 import type { Steps } from './steps';
 import type { Area, Matrix, Union, Value } from './value';
@@ -28,6 +29,10 @@ export interface Run {
   ): Value;
   /** The size of the sheet's used part: the last row and column that may hold something. */
   used(sheet: number): { rows: number; cols: number };
+  /** Whether a row shows. */
+  rowState(sheet: number, row: number): RowState;
+  /** The formula (R1C1, with its `=`) that stands in a cell, if one does. */
+  formulaAt(sheet: number, row: number, col: number): string | undefined;
   /** The index of the sheet of that name, whatever its case. */
   sheetNamed(name: string): number | undefined;
   /** The areas of `value`, or the value itself, in order: for functions that take several ranges. */

@@ -1,5 +1,6 @@
 import { EngineError } from '../EngineError';
 import { compile, type FunctionTable } from '../formula/compile';
+import type { RowState } from '../formula/rowState';
 import { type Cells, Evaluator, type TableShape, placeArea } from '../formula/evaluate';
 import type { Program } from '../formula/expression';
 import { nativeNamed } from '../formula/natives';
@@ -144,6 +145,19 @@ export class CellGraph implements Cells {
 
   used(sheet: number): { rows: number; cols: number } {
     return this.view.sheets[sheet];
+  }
+
+  rowState(sheet: number, row: number): RowState {
+    const rows = this.view.hiddenRows(sheet);
+    if (!rows) throw new Waits();
+    return rows.get(row) ?? 'shown';
+  }
+
+  formulaAt(sheet: number, row: number, col: number): string | undefined {
+    if (row > this.view.sheets[sheet].rows || col > this.view.sheets[sheet].cols) return undefined;
+    const formula = this.view.formula(sheet, row, col);
+    if (formula === undefined) throw new Needs({ k: 'area', sheet, r1: row, c1: col, r2: row, c2: col });
+    return formula ?? undefined;
   }
 
   sheetIndex(name: string): number | undefined {

@@ -1,5 +1,6 @@
 import { EngineError } from '../EngineError';
 import { type Cells, Evaluator, type TableShape } from '../formula/evaluate';
+import type { RowState } from '../formula/rowState';
 import type { Program } from '../formula/expression';
 import { BLANK, type Scalar, err, num } from '../formula/scalar';
 import { type Area, type Matrix, type Value, at } from '../formula/value';
@@ -75,6 +76,14 @@ export class Trial implements Cells {
 
   used(sheet: number): { rows: number; cols: number } {
     return this.graph.used(sheet);
+  }
+
+  rowState(sheet: number, row: number): RowState {
+    return this.graph.rowState(sheet, row);
+  }
+
+  formulaAt(sheet: number, row: number, col: number): string | undefined {
+    return this.graph.formulaAt(sheet, row, col);
   }
 
   sheetIndex(name: string): number | undefined {

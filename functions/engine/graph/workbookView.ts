@@ -1,4 +1,5 @@
 import type { Area } from '../formula/value';
+import type { HiddenRows } from '../formula/rowState';
 import type { TableShape } from '../formula/evaluate';
 
 /** What a cell holds, as the sheet tells it. */
@@ -22,6 +23,10 @@ export interface WorkbookView {
   readonly sheets: readonly { readonly name: string; readonly rows: number; readonly cols: number }[];
   /** The content of a cell: null if blank, undefined if it has not been read. */
   cell(sheet: number, row: number, col: number): CellContent | null | undefined;
+  /** The formula that stands in a cell, even where its value is taken as given: null if none, undefined if it has not been read. */
+  formula(sheet: number, row: number, col: number): string | null | undefined;
+  /** The rows of a sheet that do not show; undefined if that has not been read, and then it is asked for. */
+  hiddenRows(sheet: number): HiddenRows | undefined;
   /** Asks for an area to be read before the next round. */
   want(area: Area): void;
   /** The formula (R1C1, relative to A1) of a name seen from a sheet. */

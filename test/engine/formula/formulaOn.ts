@@ -37,6 +37,8 @@ export function formulaOn(cells: Record<string, Plain>, formula: string, options
       return { k: 'matrix', rows: area.r2 - area.r1 + 1, cols: area.c2 - area.c1 + 1, height, width, cells: out, fill: BLANK };
     },
     used: () => ({ rows: usedRows, cols: usedCols }),
+    rowState: () => 'shown',
+    formulaAt: () => undefined,
     sheetIndex: (name) => (name === 'Sheet1' ? 0 : undefined),
     name: () => undefined,
     table: () => undefined,

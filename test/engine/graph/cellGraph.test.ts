@@ -117,6 +117,8 @@ describe('evaluation', () => {
       want: (a) => { for (let r = a.r1; r <= a.r2; r++) for (let c = a.c1; c <= a.c2; c++) wanted.push(`${r},${c}`); },
       name: () => undefined,
       table: () => undefined,
+      formula: (s, r, c) => sheets.formula(s, r, c),
+      hiddenRows: () => new Map(),
     });
     let rounds = 0;
     while (!graph.evaluate([sheets.place('C1')])) {

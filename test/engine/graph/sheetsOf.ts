@@ -1,4 +1,5 @@
 import { translateFormulaToR1C1 } from '@borgar/fx';
+import type { HiddenRows } from '../../../functions/engine/formula/rowState';
 import type { TableShape } from '../../../functions/engine/formula/evaluate';
 import { CellGraph, type CellPlace } from '../../../functions/engine/graph/cellGraph';
 import type { CellContent, WorkbookView } from '../../../functions/engine/graph/workbookView';
@@ -7,6 +8,8 @@ export type Entry = number | string | boolean | { readonly formula: string; read
 
 /** A workbook in memory: `{Sheet1: {A1: 5, B1: '=A1*2'}}`. Texts that begin with = are formulas without a stored result. */
 export class Sheets implements WorkbookView {
+  /** Rows of the first sheet that do not show. */
+  hidden: HiddenRows = new Map();
   readonly sheets: { name: string; rows: number; cols: number }[];
   private readonly cells: Map<number, CellContent>[];
 
@@ -25,6 +28,14 @@ export class Sheets implements WorkbookView {
 
   cell(sheet: number, row: number, col: number): CellContent | null {
     return this.cells[sheet].get(keyOf(row, col)) ?? null;
+  }
+
+  formula(sheet: number, row: number, col: number): string | null {
+    return this.cell(sheet, row, col)?.formula ?? null;
+  }
+
+  hiddenRows(sheet: number): HiddenRows {
+    return sheet === 0 ? this.hidden : new Map();
   }
 
   want(): void {

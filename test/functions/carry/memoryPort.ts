@@ -1,10 +1,12 @@
 import { CellGraph } from '../../../functions/engine/graph/cellGraph';
+import type { HiddenRows } from '../../../functions/engine/formula/rowState';
 import type { PortArea, PortCell, WorkbookPort } from '../../../functions/workbook';
 import { type Entry, Sheets } from '../../engine/graph/sheetsOf';
 
 /** A workbook in memory behind a port. Formulas without a stored result are computed first, as a sheet would show them. */
-export function memoryPort(contents: Record<string, Record<string, Entry>>, names: Record<string, string> = {}): WorkbookPort & { reads: number } {
+export function memoryPort(contents: Record<string, Record<string, Entry>>, names: Record<string, string> = {}, hidden?: HiddenRows): WorkbookPort & { reads: number } {
   const sheets = new Sheets(contents, names);
+  if (hidden) sheets.hidden = hidden;
   const graph = new CellGraph(sheets, { compare: false, slopes: false });
   const shown = (sheet: number, row: number, col: number): PortCell | null => {
     const content = sheets.cell(sheet, row, col);
@@ -21,6 +23,8 @@ export function memoryPort(contents: Record<string, Record<string, Entry>>, name
     sheets: async () => sheets.sheets,
     names: async () => Object.entries(names).map(([name]) => ({ name, formula: sheets.name(name)! })),
     tables: async () => [],
+    hiddenRows: async (sheet: string) =>
+      [...sheets.hiddenRows(sheets.sheets.findIndex((s) => s.name === sheet))].map(([row, state]) => ({ row, filtered: state === 'filtered' })),
     read: async (areas: readonly PortArea[]) => {
       port.reads++;
       return areas.map((area) => {

@@ -6,10 +6,11 @@ import { type Bool, type Scalar, type Text, err } from '../scalar';
 import type { Value } from '../value';
 import { follow } from './follow';
 import { areaInText } from './areaInText';
+import { refuseUse } from './refuseUse';
 import { arrayFunction, isError, optionsOf, present, whole } from './options';
 
 /**
- * ADDRESS, AREAS, and the references that are found at run time: OFFSET and INDIRECT. What is read from them is linked with
+ * ADDRESS, AREAS, CELL, and the references that are found at run time: OFFSET and INDIRECT. What is read from them is linked with
  * slope 0 to the numbers or the text that decided where they lie.
  */
 export const addresses: Native[] = [
@@ -19,6 +20,7 @@ export const addresses: Native[] = [
     const areas = run.areas(given);
     return areas ? run.steps.count(areas.length, ...areas.flatMap((a) => a.by ?? [])) : err('#VALUE!');
   }, { shareable: false }),
+  rangeFunction('CELL', ['text', 'range'], cellInfo, { args: [1, 2], shareable: false }),
   arrayFunction('OFFSET', ['number', 'number', 'number', 'number'], 3, offset),
   rangeFunction('INDIRECT', ['range', 'range'], (run, given) => {
     const options = optionsOf(run, 'INDIRECT', given, ['text', 'boolean']);
@@ -29,6 +31,26 @@ export const addresses: Native[] = [
     return area ? follow(run, area, ...by) : run.steps.error('#REF!', ...by);
   }, { args: [1, 2], shareable: false }),
 ];
+
+/** CELL(what, reference): what does not depend on formats, files or the machine. Without a reference it means the cell changed last. */
+function cellInfo(run: Run, [what, given]: readonly Value[]): Value {
+  const asked = run.scalar(what);
+  if (asked.k === 'error') return asked;
+  const kind = String(asked.v).toLowerCase();
+  if (given === undefined || given.k === 'missing') refuseUse('CELL', 'without a reference it means the cell that was changed last');
+  if (given.k === 'error') return given;
+  const areas = run.areas(given);
+  if (areas?.length !== 1) return run.steps.error('#VALUE!', asked);
+  const { sheet, r1, c1 } = areas[0];
+  if (kind === 'row') return run.steps.count(r1, asked);
+  if (kind === 'col') return run.steps.count(c1, asked);
+  if (kind === 'address' && sheet === run.sheet) return run.steps.text(`$${toCol(c1 - 1)}$${r1}`, asked);
+  if (kind !== 'contents' && kind !== 'type') refuseUse('CELL', `"${String(asked.v)}" tells of more than the cell's contents`);
+  const cell = { ...areas[0], r2: r1, c2: c1 };
+  if (kind === 'contents') return follow(run, run.scalar(cell), asked);
+  const s = run.scalar(cell);
+  return run.steps.text(s.k === 'blank' ? 'b' : s.k === 'text' ? 'l' : 'v', asked, s);
+}
 
 /** ADDRESS(row, column, [kind], [A1 form], [sheet]): kind 1 absolute, 2 row absolute, 3 column absolute, 4 relative. */
 function address(run: Run, options: readonly (Scalar | undefined)[]): Scalar {

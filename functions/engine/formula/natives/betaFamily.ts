@@ -34,6 +34,18 @@ export const betaFamily: Native[] = [
     if (cumulative === 0) return [mass, NaN, NaN, mass * (k / p - (n - k) / (1 - p)), 0];
     return [k === n ? 1 : regularizedBeta(1 - p, n - k, k + 1, p), NaN, NaN, (-(n - k) * mass) / (1 - p), 0];
   }),
+  ...named('BINOM.DIST.RANGE', 3, 4, ([trials, p, from, to]) => {
+    const [n, low, high] = [Math.trunc(trials), Math.trunc(from), Math.trunc(Number.isNaN(to) ? from : to)];
+    if (!(p >= 0 && p <= 1) || n < 0 || low < 0 || low > n || high < low || high > n) return '#NUM!';
+    if (p === 0 || p === 1) return [(p === 0 ? low === 0 : high === n) ? 1 : 0, NaN, NaN, NaN, NaN];
+    let [sum, slope] = [0, 0];
+    for (let k = low; k <= high; k++) {
+      const mass = binomial(k, n, p);
+      sum += mass;
+      slope += mass * (k / p - (n - k) / (1 - p));
+    }
+    return [Math.min(1, sum), NaN, slope, NaN, NaN];
+  }),
   ...named('BINOM.INV CRITBINOM', 3, 3, ([trials, p, alpha]) => {
     const n = Math.trunc(trials);
     if (n < 0 || !(p > 0 && p < 1) || !(alpha > 0 && alpha < 1)) return '#NUM!';

@@ -3,16 +3,23 @@ import { numbersOf } from '../ranges';
 import type { Scalar } from '../scalar';
 import { numberOf } from './argument';
 import { errorFrom, linked } from './linked';
+import { strictFunction } from './strictFunction';
 
 /** Counts of arrangements. Arguments are cut off to whole numbers, so all have slope 0. */
 export const combinatorics: Native[] = [
   counted('FACT', 1, ([n]) => (n < 0 ? NaN : product(1, n))),
-  counted('FACTDOUBLE', 1, ([n]) => (n < -1 ? NaN : product(n % 2 === 0 ? 2 : 1, n, 2))),
+  strictFunction('FACTDOUBLE', ['number'], (run, [x]) => {
+    const n = Math.trunc(numberOf(x).v);
+    const value = n < -1 ? NaN : product(n % 2 === 0 ? 2 : 1, n, 2);
+    return Number.isFinite(value) ? run.steps.count(value, x!) : run.steps.error('#NUM!', x!);
+  }),
   counted('COMBIN', 2, ([n, k]) => (k < 0 || n < k ? NaN : combinations(n, k))),
   counted('COMBINA', 2, ([n, k]) => (n < 0 || k < 0 || (n === 0 && k > 0) ? NaN : combinations(Math.max(0, n + k - 1), k))),
   counted('PERMUT', 2, ([n, k]) => (n < 0 || k < 0 || n < k ? NaN : product(n - k + 1, n))),
   counted('PERMUTATIONA', 2, ([n, k]) => (n < 0 || k < 0 ? NaN : n === 0 && k === 0 ? 1 : n ** k)),
   rangeFunction('MULTINOMIAL', ['range'], (run, args) => {
+    const written = args.find((a) => a.k === 'boolean');
+    if (written) return run.steps.error('#VALUE!', written as Scalar);
     const over: Scalar[] = [];
     const xs = numbersOf(run, args, over);
     if ('k' in xs) return xs;
@@ -38,9 +45,13 @@ function product(first: number, last: number, step = 1): number {
   return value;
 }
 
-/** n over k. Each step divides without a rest, so it is exact as long as it can be held. */
+/** n over k. Each step divides without a rest, so it is exact as long as it can be held; where a product would not be, the quotient comes first. */
 function combinations(n: number, k: number): number {
+  const steps = Math.min(k, n - k);
   let value = 1;
-  for (let i = 1; i <= Math.min(k, n - k) && value < Infinity; i++) value = (value * (n - Math.min(k, n - k) + i)) / i;
+  for (let i = 1; i <= steps && value < Infinity; i++) {
+    const factor = n - steps + i;
+    value = value * factor < Infinity ? (value * factor) / i : (value / i) * factor;
+  }
   return value;
 }

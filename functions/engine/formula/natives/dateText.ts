@@ -12,6 +12,9 @@ const WORDS = new Set([
   'fri', 'sat', 'sun', 'monday', 'tuesday', 'wednesday', 'thursday', 'friday', 'saturday', 'sunday', 'st', 'nd', 'rd', 'th',
 ]);
 
+/** Signs that stand in no date or time: `<0.1`, `5 ± 1`, `#3`. */
+const IN_NO_DATE = /[<>=≤≥±~*#?&_@!|"^{}[\]\\µ°]/;
+
 const TIME = /(?:^|\s)(\d{1,2}):(\d{2})(?::(\d{2}(?:\.\d{1,3})?))?(?:\s*(am|pm))?$/i;
 
 /**
@@ -21,7 +24,7 @@ const TIME = /(?:^|\s)(\d{1,2}):(\d{2})(?::(\d{2}(?:\.\d{1,3})?))?(?:\s*(am|pm))
  * @source common practice of en-US workbooks
  */
 export function readDateText(text: string): TextDate {
-  if (!/\d/.test(text) || (text.toLowerCase().match(/\p{L}+/gu) ?? []).some((word) => !WORDS.has(word))) return 'none';
+  if (!/\d/.test(text) || IN_NO_DATE.test(text) || (text.toLowerCase().match(/\p{L}+/gu) ?? []).some((word) => !WORDS.has(word))) return 'none';
   if (text !== text.trim()) return 'unknown';
   const time = TIME.exec(text);
   const date = time ? text.slice(0, time.index).trim() : text;

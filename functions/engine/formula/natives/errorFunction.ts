@@ -12,14 +12,16 @@ const erf = (x: number): number => Math.sign(x) * normalWithin(Math.abs(x) * Mat
 /** erfc(x) = 1 − erf(x), with its digits in the far tail. @source DLMF 7.2.2 */
 const erfc = (x: number): number => 2 * normalUpperTail(x * Math.SQRT2);
 
-/** ERF and ERFC through the normal distribution. */
+/** ERF, ERFC and their PRECISE forms through the normal distribution. */
 export const errorFunction: Native[] = [
   strictFunction('ERF', ['number', 'number'], (run, args) => {
     const [a, b] = args as Num[];
     if (b === undefined) return run.steps.unary(erf(a.v), a, slope(a.v));
     return run.steps.binary(between(a.v, b.v), a, -slope(a.v), b, slope(b.v));
   }, { args: [1, 2] }),
-  strictFunction('ERFC', ['number'], (run, [a]) => run.steps.unary(erfc((a as Num).v), a!, -slope((a as Num).v))),
+  strictFunction('ERF.PRECISE', ['number'], (run, [a]) => run.steps.unary(erf((a as Num).v), a!, slope((a as Num).v))),
+  ...['ERFC', 'ERFC.PRECISE'].map((name) =>
+    strictFunction(name, ['number'], (run, [a]) => run.steps.unary(erfc((a as Num).v), a!, -slope((a as Num).v)))),
 ];
 
 /** erf(b) − erf(a), by the tails where both limits lie in one. */

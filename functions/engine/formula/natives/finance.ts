@@ -53,6 +53,28 @@ export const finance: Native[] = [
     if (!values.some((v) => v > 0) || !values.some((v) => v < 0)) return '#NUM!';
     return [root('IRR', (r) => values.reduce((sum, v, i) => sum + v / (1 + r) ** i, 0), start)];
   }), { args: [1, 2] }),
+  ofNumbers('ISPMT', 4, 4, ([rate, period, n, pv]) => (n === 0 ? '#DIV/0!' : [pv * rate * (period / n - 1)])),
+  ofNumbers('DOLLARDE', 2, 2, ([written, parts]) => {
+    const n = Math.trunc(parts);
+    if (n < 1) return n < 0 ? '#NUM!' : '#DIV/0!';
+    const whole = Math.trunc(written);
+    return [whole + ((written - whole) * 10 ** Math.ceil(Math.log10(n))) / n];
+  }),
+  ofNumbers('DOLLARFR', 2, 2, ([value, parts]) => {
+    const n = Math.trunc(parts);
+    if (n < 1) return n < 0 ? '#NUM!' : '#DIV/0!';
+    const whole = Math.trunc(value);
+    return [whole + ((value - whole) * n) / 10 ** Math.ceil(Math.log10(n))];
+  }),
+  rangeFunction('FVSCHEDULE', ['number', 'range'], (run, [principal, rates]) => overFlows(run, [rates], [principal], (values, [sum]) =>
+    [values.reduce((product, r) => product * (1 + r), sum)])),
+  rangeFunction('XNPV', ['number', 'range', 'range'], (run, [rate, flows, days]) => datedFlows(run, flows, days, [rate], (values, at, [r]) =>
+    (r > 0 ? [datedValue(values, at, r)] : '#NUM!'))),
+  rangeFunction('XIRR', ['range', 'range', 'number'], (run, [flows, days, guess]) =>
+    datedFlows(run, flows, days, guess === undefined ? [] : [guess], (values, at, [start = 0.1]) => {
+      if (!values.some((v) => v > 0) || !values.some((v) => v < 0)) return '#NUM!';
+      return [root('XIRR', (r) => datedValue(values, at, r), start)];
+    }), { args: [2, 3] }),
   rangeFunction('MIRR', ['range', 'number', 'number'], (run, [flows, paid, earned]) => overFlows(run, [flows], [paid, earned], (values, [out, back]) => {
     const n = values.length;
     const at = (rate: number, keep: (v: number) => boolean): number => values.reduce((sum, v, i) => sum + (keep(v) ? v / (1 + rate) ** i : 0), 0);
@@ -138,4 +160,24 @@ function overFlows(run: Run, flows: readonly Value[], options: readonly Value[],
   if ('k' in xs) return xs;
   const found = xs.length === 0 ? '#NUM!' : of(xs.map((x) => x.v), given.map((s) => numberOf(s).v));
   return typeof found === 'string' ? errorFrom(run, found, [...xs, ...given]) : run.steps.many(found[0], [...xs, ...given], NaN);
+}
+
+/** Flows on days, discounted to the first of them by the year of 365 days. */
+const datedValue = (values: readonly number[], days: readonly number[], rate: number): number =>
+  values.reduce((sum, v, i) => sum + v / (1 + rate) ** ((days[i] - days[0]) / 365), 0);
+
+/** Flows with their days; refused where cells are missing or hold no number, for a flow and its day must stay together. */
+function datedFlows(
+  run: Run, flows: Value, days: Value, options: readonly Value[], of: (values: number[], days: number[], options: number[]) => WithSlopes,
+): Scalar {
+  const pairs = [flows, days].map((v) => run.matrix(v).cells);
+  const wrong = pairs.flat().find((s) => s.k !== 'number');
+  if (wrong) return wrong.k === 'error' ? wrong : refuseUse('XNPV or XIRR', 'a flow or a day is no number');
+  if (pairs[0].length !== pairs[1].length) return errorFrom(run, '#NUM!', pairs.flat());
+  const given = options.map((o) => run.scalar(o));
+  for (const s of given) if (s.k === 'error') return s;
+  const [values, at] = pairs.map((cells) => cells.map((s) => (s as Num).v));
+  const dates = at.map(Math.trunc);
+  const found = dates.length === 0 || dates.some((d) => d < dates[0]) ? '#NUM!' : of(values, dates, given.map((s) => numberOf(s).v));
+  return typeof found === 'string' ? errorFrom(run, found, [...pairs.flat(), ...given]) : run.steps.many(found[0], [...pairs.flat(), ...given], NaN);
 }

@@ -43,6 +43,7 @@ import { sorting } from './sorting';
 import { spread } from './spread';
 import { standardized } from './standardized';
 import { straightLine } from './straightLine';
+import { subtotals } from './subtotals';
 import { sums } from './sums';
 import { textPieces } from './textPieces';
 import { texts } from './texts';
@@ -60,7 +61,7 @@ const table = new Map<string, Native>(
     ...engineering, ...errorFunction, ...filtering, ...finance, ...gammaFamily, ...hypothesisTests, ...information, ...lambdas,
     ...linest, ...logic, ...lookups, ...matrices, ...means, ...moments, ...multiples, ...normalFamily, ...pairSums,
     ...quantiles, ...rankings, ...ranks, ...references, ...regressions, ...rounding, ...shaping, ...sorting, ...spread,
-    ...standardized, ...straightLine, ...sums, ...textPieces, ...texts, ...textSplit, ...tFamily, ...times, ...trigonometry,
+    ...standardized, ...straightLine, ...subtotals, ...sums, ...textPieces, ...texts, ...textSplit, ...tFamily, ...times, ...trigonometry,
     ...workdays, ...writtenNumbers,
   ].map((native) => [native.name, native]),
 );

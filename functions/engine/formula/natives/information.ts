@@ -1,7 +1,9 @@
 import { toNumber } from '../coerce';
 import { type Native, rangeFunction, scalarFunction } from '../native';
-import { type ErrorCode, type Scalar, BLANK, FALSE, TRUE, err, num } from '../scalar';
+import { type ErrorCode, type Scalar, BLANK, FALSE, TRUE, bool, err, num } from '../scalar';
 import { isReference } from '../value';
+import { sizeOf } from './follow';
+import { refuseUse } from './refuseUse';
 
 const ERROR_NUMBERS: Partial<Record<ErrorCode, number>> = {
   '#NULL!': 1, '#DIV/0!': 2, '#VALUE!': 3, '#REF!': 4, '#NAME?': 5, '#NUM!': 6, '#N/A': 7, '#GETTING_DATA': 8,
@@ -21,6 +23,13 @@ export const information: Native[] = [
   is('ISNA', (s) => s.k === 'error' && s.v === '#N/A'),
   is('ISLOGICAL', (s) => s.k === 'boolean'),
   rangeFunction('ISREF', ['range'], (_run, [value]) => (isReference(value) ? TRUE : FALSE)),
+  rangeFunction('ISFORMULA', ['range'], (run, [value]) => {
+    if (value.k === 'error') return value;
+    const areas = run.areas(value);
+    if (areas?.length !== 1) return err('#VALUE!');
+    if (sizeOf(run, areas[0])!.rows * sizeOf(run, areas[0])!.cols > 1) refuseUse('ISFORMULA', 'its range has several cells');
+    return bool(run.formulaAt(areas[0].sheet, areas[0].r1, areas[0].c1) !== undefined);
+  }, { shareable: false }),
   parity('ISEVEN', 0),
   parity('ISODD', 1),
   scalarFunction('NA', [], () => err('#N/A')),

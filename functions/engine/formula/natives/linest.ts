@@ -73,7 +73,7 @@ function fitted(data: Data, constant: boolean): Model {
   const yc = centred(y);
   const xc = x.map(centred);
   const fit = constant ? leastSquares(xc.map((c) => c.left), yc.left) : leastSquares(x, y);
-  if (!fit) throw new EngineError('refused', 'uses LINEST on x values of which one column follows from the others or never changes');
+  if (!fit) throw new EngineError('refused', 'fits a line to x values of which one column follows from the others or never changes');
   if (!constant) return { ...fit, y, x, constant };
   const b = xc.reduce((s, c, j) => s - fit.coefficients[j] * c.mean, yc.mean);
   const byY = yc.left.map((_, i) => xc.reduce((s, c, j) => s - c.mean * fit.byY[j][i], 1 / y.length));

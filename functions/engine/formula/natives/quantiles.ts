@@ -28,7 +28,8 @@ function inclusive(fraction: number, n: number): ReturnType<PlaceOf> {
 }
 
 function exclusive(fraction: number, n: number): ReturnType<PlaceOf> {
-  const place = fraction * (n + 1) - 1;
+  const exact = fraction * (n + 1) - 1;
+  const place = Math.abs(exact - Math.round(exact)) < 1e-12 * (n + 1) ? Math.round(exact) : exact; // 1/(n + 1) may be a unit in the last place short
   return fraction > 0 && fraction < 1 && place >= 0 && place <= n - 1 ? { place, slope: n + 1 } : undefined;
 }
 

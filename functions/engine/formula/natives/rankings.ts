@@ -1,18 +1,25 @@
 import { type Native, rangeFunction } from '../native';
 import { numbersOf } from '../ranges';
 import type { Run } from '../run';
-import { type Num, type Scalar } from '../scalar';
-import type { Value } from '../value';
+import type { Err, Num, Scalar } from '../scalar';
+import { type Value, matrix } from '../value';
 import { numberOf } from './argument';
 import { errorFrom, linked } from './linked';
 
-/** The rank of a number among others, the share of others below it, and the number that stands there most often. */
+/** The rank of a number among others, the share of others below it, and the numbers that stand there most often. */
 export const rankings: Native[] = [
   ...['RANK', 'RANK.EQ'].map((name) => rank(name, () => 0)),
   rank('RANK.AVG', (equal) => (equal - 1) / 2),
   ...['PERCENTRANK', 'PERCENTRANK.INC'].map((name) => share(name, (place, n) => (n === 1 ? 1 : place / (n - 1)))),
   share('PERCENTRANK.EXC', (place, n) => (place + 1) / (n + 1)),
-  ...['MODE', 'MODE.SNGL'].map((name) => rangeFunction(name, ['range'], mode, { args: [1, 255], repeating: 1 })),
+  ...['MODE', 'MODE.SNGL'].map((name) => rangeFunction(name, ['range'], (run, args) => {
+    const found = modes(run, args);
+    return 'k' in found ? found : found[0];
+  }, { args: [1, 255], repeating: 1 })),
+  rangeFunction('MODE.MULT', ['range'], (run, args) => {
+    const found = modes(run, args);
+    return 'k' in found ? found : matrix(found.length, 1, found);
+  }, { args: [1, 255], repeating: 1 }),
 ];
 
 /** RANK(number, reference, [ascending]): equal numbers share the rank of the first of them, or the mean of all. */
@@ -64,18 +71,18 @@ function placeOf(sorted: readonly number[], v: number): number | undefined {
   return sorted[at] === v ? at : at - 1 + (v - sorted[at - 1]) / (sorted[at] - sorted[at - 1]);
 }
 
-/** The most frequent number, the first met of several; #N/A where none stands twice. All numbers decide. */
-function mode(run: Run, args: readonly Value[]): Scalar {
+/** The most frequent numbers in the order in which they were met; #N/A where none stands twice. All numbers decide. */
+function modes(run: Run, args: readonly Value[]): Scalar[] | Err {
   const over: Scalar[] = [];
-  const xs: Num[] | Scalar = numbersOf(run, args, over);
+  const xs: Num[] | Err = numbersOf(run, args, over);
   if ('k' in xs) return xs;
   const counts = new Map<number, number>();
   for (const { v } of xs) counts.set(v, (counts.get(v) ?? 0) + 1);
-  let best: number | undefined;
-  for (const [v, count] of counts) if (count > 1 && (best === undefined || count > counts.get(best)!)) best = v;
-  if (best === undefined) return errorFrom(run, '#N/A', [...xs, ...over]);
-  const first = xs.findIndex((x) => x.v === best);
-  const slopes = new Float64Array(xs.length);
-  slopes[first] = NaN; // an uncertain number has no most frequent one
-  return linked(run, best, xs, slopes, over);
+  const most = Math.max(0, ...counts.values());
+  if (most < 2) return errorFrom(run, '#N/A', [...xs, ...over]);
+  return [...counts].filter(([, count]) => count === most).map(([v]) => {
+    const slopes = new Float64Array(xs.length);
+    slopes[xs.findIndex((x) => x.v === v)] = NaN; // an uncertain number has no most frequent one
+    return linked(run, v, xs, slopes, over);
+  });
 }

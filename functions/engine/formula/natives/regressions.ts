@@ -37,7 +37,7 @@ function logarithms(run: Run, y: Value): Matrix | Scalar {
   const logs: Scalar[] = [];
   for (const s of elementsOf(m)) {
     if (s.k === 'error') return s;
-    if (s.k !== 'number') return err('#VALUE!');
+    if (s.k !== 'number') return run.steps.error('#VALUE!', s);
     if (s.v <= 0) return run.steps.error('#NUM!', s);
     logs.push(run.steps.unary(Math.log(s.v), s, 1 / s.v));
   }
@@ -65,7 +65,7 @@ function onFit(run: Run, [y, x = MISSING, fresh = MISSING, constant = MISSING]: 
 function point(run: Run, b: Num, m: readonly Num[], x: readonly Scalar[]): Scalar {
   for (const s of x) {
     if (s.k === 'error') return s;
-    if (s.k !== 'number') return err('#VALUE!');
+    if (s.k !== 'number') return run.steps.error('#VALUE!', s);
   }
   const numbers = x as readonly Num[];
   const value = numbers.reduce((sum, s, j) => sum + m[j].v * s.v, b.v);

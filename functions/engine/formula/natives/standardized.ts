@@ -1,7 +1,7 @@
 import { type Native, rangeFunction, scalarFunction, smooth } from '../native';
 import { pairsOf } from '../ranges';
 import type { Run } from '../run';
-import { type Num, type Scalar, err, num } from '../scalar';
+import { type Num, type Scalar, NONE, num } from '../scalar';
 import { type Value, matrix } from '../value';
 import { numberOf } from './argument';
 import { elementsOf } from './arrays';
@@ -39,21 +39,26 @@ function prob(run: Run, [values, chances, from, to]: readonly Value[]): Scalar {
   return linked(run, y.reduce((sum, p, i) => sum + p.v * taken[i], 0), y, taken, over);
 }
 
-/** How many numbers lie up to each bin, above the one before it, and a last count of those above all. Bins that fall are refused. */
+/**
+ * How many numbers lie up to each bin, above the one before it, and a last count of those above all; without bins, of all numbers. Bins
+ * that fall are refused.
+ */
 function frequency(run: Run, [data, bins]: readonly Value[]): Value {
   const numbers: Num[] = [];
+  const over: Scalar[] = [];
   for (const part of run.parts(data)) for (const s of run.matrix(part).cells) {
     if (s.k === 'error') return s;
     if (s.k === 'number') numbers.push(s);
+    else if (s.d !== NONE) over.push(s);
   }
   const limits: Num[] = [];
   for (const part of run.parts(bins)) for (const s of elementsOf(run.matrix(part))) {
     if (s.k === 'error') return s;
     if (s.k === 'number') limits.push(s);
+    else if (s.d !== NONE) over.push(s);
   }
-  if (limits.length === 0) return err('#VALUE!');
   if (limits.some((b, i) => i > 0 && b.v <= limits[i - 1].v)) refuseUse('FREQUENCY', 'its bins do not rise');
   const below = [...limits.map((b) => numbers.filter((s) => s.v <= b.v).length), numbers.length];
-  const by = together(run, [...numbers, ...limits]);
+  const by = together(run, [...numbers, ...limits, ...over]);
   return matrix(below.length, 1, below.map((count, i) => run.steps.chosen(num(count - (i > 0 ? below[i - 1] : 0)), by)));
 }

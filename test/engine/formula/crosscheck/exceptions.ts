@@ -9,7 +9,7 @@ export interface Exception {
 
 /** Each is checked to be true still; a function may be excepted for one engine only, so the other one judges it. */
 export const exceptions: readonly Exception[] = [
-  ...listed('missing', 'not among its functions', 'KURT TRIMMEAN PROB TREND GROWTH LOGEST'),
+  ...listed('missing', 'not among its functions', 'KURT TRIMMEAN PROB TREND GROWTH LOGEST ERF.PRECISE ERFC.PRECISE BINOM.DIST.RANGE'),
   ...listed('differs', 'its t, F and beta distributions are good to nine digits only', `
     CONFIDENCE.T T.DIST T.DIST.RT T.DIST.2T TDIST T.INV T.INV.2T TINV F.DIST F.DIST.RT FDIST F.INV F.INV.RT FINV BETA.INV BETAINV`),
   ...listed('differs', 'nine digits, and a density that is not divided by the width of the interval', 'BETA.DIST'),

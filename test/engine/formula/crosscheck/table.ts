@@ -124,7 +124,8 @@ export const smoothTable: readonly Row[] = [
   ...['1', '0'].map((c) => row('NEGBINOM.DIST', `=NEGBINOM.DIST(3,5,A1,${c})`, { A1: [0.2, 0.8] })),
   row('NEGBINOMDIST', '=NEGBINOMDIST(3,5,A1)', { A1: [0.2, 0.8] }),
 
-  unary('ERF', -2, 2), row('ERF', '=ERF(A1,B1)', { A1: [-1, 0.2], B1: [0.5, 2] }), unary('ERFC', -2, 3),
+  unary('ERF.PRECISE', -2, 2), unary('ERFC.PRECISE', -2, 3), row('BINOM.DIST.RANGE', '=BINOM.DIST.RANGE(8,A1,2,5)', { A1: [0.1, 0.8] }),
+  unary('ERF', -2, 2), row('ERF', '=ERF(A1,B1)', { A1: [-1, 0.2], B1: [0.5, 2] }), unary('ERFC', -2, 2),
   row('SERIESSUM', '=SERIESSUM(A1,B1,C1,D1:F1)', { A1: [0.5, 2], B1: [0.5, 2], C1: [0.5, 2], D1: [1, 3], E1: [1, 3], F1: [1, 3] }),
   row('CONVERT', '=CONVERT(A1,"ft","m")', { A1: [1, 9] }), row('CONVERT', '=CONVERT(A1,"F","C")', { A1: [40, 99] }),
   row('SEQUENCE', '=SUMSQ(SEQUENCE(3,2,A1,B1))', { A1: [1, 5], B1: [1, 2] }),

@@ -116,3 +116,19 @@ describe('INDIRECT', () => {
 
   it('of several texts is refused', () => expect(() => formulaOn(cells, '=INDIRECT({"A1","A2"})')).toThrow(/gives INDIRECT an array/));
 });
+
+describe('CELL and ISFORMULA', () => {
+  const cells = { A1: 5, B2: 'x' };
+  it.each([
+    ['CELL("row",B2:C9)', 2], ['CELL("col",B2)', 2], ['CELL("ADDRESS",B2)', '$B$2'], ['CELL("contents",A1:B2)', 5],
+    ['CELL("type",A1)', 'v'], ['CELL("type",B2)', 'l'], ['CELL("type",C3)', 'b'], ['ISFORMULA(A1)', false],
+  ])('%s', (formula, expected) => expect(formulaOn(cells, formula).value).toBe(expected));
+
+  it('CELL("contents") has the slope of the cell', () => expect(formulaOn(cells, 'CELL("contents",A1)*2').slopes).toEqual({ A1: 2 }));
+
+  it.each([
+    ['CELL("row")', 'uses CELL in a way that cannot be followed: without a reference it means the cell that was changed last'],
+    ['CELL("format",A1)', 'uses CELL in a way that cannot be followed: "format" tells of more than the cell\'s contents'],
+    ['ISFORMULA(A1:A2)', 'uses ISFORMULA in a way that cannot be followed: its range has several cells'],
+  ])('%s is refused', (formula, words) => expect(() => formulaOn(cells, formula)).toThrow(words));
+});

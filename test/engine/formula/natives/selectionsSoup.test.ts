@@ -36,6 +36,8 @@ const cells: Cells = {
     return { k: 'matrix', rows: area.r2 - area.r1 + 1, cols: area.c2 - area.c1 + 1, height, width, cells: stored, fill: BLANK };
   },
   used: () => ({ rows: 7, cols: 3 }),
+  rowState: () => 'shown',
+  formulaAt: () => undefined,
   sheetIndex: () => undefined,
   name: () => undefined,
   table: () => undefined,
