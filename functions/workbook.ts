@@ -7,6 +7,8 @@ export interface WorkbookPort {
   revision(): number;
   /** Sheets in tab order. */
   sheets(): Promise<readonly PortSheet[]>;
+  /** Whether the workbook counts its days from 1904. */
+  date1904(): Promise<boolean>;
   names(): Promise<readonly PortName[]>;
   tables(): Promise<readonly PortTable[]>;
   /** The rows of a sheet that do not show. */

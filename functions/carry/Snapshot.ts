@@ -23,14 +23,15 @@ export class Snapshot implements WorkbookView {
     readonly sheets: readonly { readonly name: string; readonly rows: number; readonly cols: number }[],
     private readonly names: readonly PortName[],
     private readonly tables: readonly PortTable[],
+    readonly date1904: boolean,
   ) {
     this.columns = sheets.map(() => new Map());
     sheets.forEach((s, i) => this.places.set(s.name.toLowerCase(), i));
   }
 
   static async open(port: WorkbookPort): Promise<Snapshot> {
-    const [sheets, names, tables] = await Promise.all([port.sheets(), port.names(), port.tables()]);
-    return new Snapshot(port, sheets, names, tables);
+    const [sheets, names, tables, date1904] = await Promise.all([port.sheets(), port.names(), port.tables(), port.date1904()]);
+    return new Snapshot(port, sheets, names, tables, date1904);
   }
 
   /** The index of a sheet by name, without regard to case. */

@@ -37,6 +37,7 @@ export function portOf(sheets: Record<string, HostCell[][]>, asked: PortArea[] =
     sheets: () => Promise.resolve(Object.entries(sheets).map(([name, rows]) => ({ name, rows: rows.length, cols: rows[0]?.length ?? 0 }))),
     names: () => Promise.resolve([]),
     tables: () => Promise.resolve([]),
+    date1904: () => Promise.resolve(false),
     hiddenRows: () => Promise.resolve([]),
     read: (areas) => {
       asked.push(...areas);

@@ -17,6 +17,7 @@ export class Dependents implements Surroundings {
   readonly callers = new Set<number>();
   /** Formulas whose references only an evaluation can tell. */
   readonly unforeseen = new Set<number>();
+  private tableColumns = 0;
   private readonly programs = new Map<string, Program>();
   private readonly reads = new Map<number, { formula: string; areas: readonly Area[] }>();
 
@@ -49,6 +50,7 @@ export class Dependents implements Surroundings {
    * @param changed Cells whose content changed; of a spill that did, the anchor too, through which `A1#` reads it.
    */
   closure(seeds: Iterable<number>, changed: Iterable<number>): Set<number> {
+    this.readTablesAnew();
     const found = new Set<number>();
     const queue: number[] = [...changed];
     const reach = (key: number): void => {
@@ -82,6 +84,14 @@ export class Dependents implements Surroundings {
 
   table(name: string, sheet: number, row: number, col: number): ReturnType<WorkingBook['table']> {
     return this.working.table(name, sheet, row, col);
+  }
+
+  /** Formulas read what a table covers now: once one has grown, all are looked at again. */
+  private readTablesAnew(): void {
+    const { length } = this.working.tableColumns;
+    if (length === this.tableColumns) return;
+    this.tableColumns = length;
+    for (const [key, cell] of this.working.formulaCells()) this.add(key, cell);
   }
 
   private program(formula: string): Program {

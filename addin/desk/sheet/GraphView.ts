@@ -17,7 +17,10 @@ export const STORED_MARK = 'ROOTSUM_DESK.STORED';
 export class GraphView implements WorkbookView {
   readonly sheets: readonly { readonly name: string; readonly rows: number; readonly cols: number }[];
 
+  readonly date1904: boolean;
+
   constructor(private readonly working: WorkingBook) {
+    this.date1904 = working.book.date1904;
     this.sheets = working.book.sheets.map(({ name, index }) => ({ name, ...working.used(index) }));
   }
 

@@ -5,6 +5,7 @@ import type { Book } from '../book/Book';
 import type { BookCell, CellValue } from '../book/BookCell';
 import type { StyleRequest } from '../book/Edit';
 import { isOccupied } from '../book/SheetData';
+import type { BookTable } from '../book/tables';
 import type { HiddenRows } from '../../../functions/engine/formula/rowState';
 import type { TableShape } from '../../../functions/engine/formula/evaluate';
 import type { CellPlace } from '../../../functions/engine/graph/cellGraph';
@@ -33,6 +34,8 @@ export class WorkingBook {
   readonly edited = new Set<number>();
   /** Styles asked for. */
   readonly styles = new Map<number, StyleRequest>();
+  /** Columns that tables gained, in order. */
+  readonly tableColumns: { readonly table: string; readonly name: string; readonly formula?: string; readonly sheet: number; readonly row: number; readonly col: number }[] = [];
   private readonly changes = new Map<number, WorkingCell | null>();
   private readonly extents: { rows: number; cols: number }[];
   private readonly r1c1 = new Map<number, { stored: string; relative: string }>();
@@ -123,11 +126,26 @@ export class WorkingBook {
     return (local ?? this.nameFormulas.find((n) => n.sheet === undefined && n.key === key))?.formula;
   }
 
+  /** The tables as they stand now. */
+  get tables(): readonly BookTable[] {
+    if (this.tableColumns.length === 0) return this.book.tables;
+    return this.book.tables.map((table) => {
+      const gained = this.tableColumns.filter((c) => c.table === table.name).map((c) => c.name);
+      return { ...table, ref: { ...table.ref, right: table.ref.right + gained.length }, columns: [...table.columns, ...gained] };
+    });
+  }
+
+  /** Gives a table a new last column with its heading; the cells below are for `setFormula`. */
+  addTableColumn({ name: table, sheet, ref }: BookTable, name: string, formula?: string): void {
+    this.tableColumns.push({ table, name, sheet, row: ref.top, col: ref.right + 1, ...(formula !== undefined && { formula }) });
+    this.setConstant(sheet, ref.top, ref.right + 1, name);
+  }
+
   /** A table by name, or with an empty name the table around a cell. */
   table(name: string, sheet: number, row: number, col: number): TableShape | undefined {
     const found = name === ''
-      ? this.book.tables.find((t) => t.sheet === sheet && contains(t.ref, row, col))
-      : this.book.tables.find((t) => t.name.toLowerCase() === name.toLowerCase());
+      ? this.tables.find((t) => t.sheet === sheet && contains(t.ref, row, col))
+      : this.tables.find((t) => t.name.toLowerCase() === name.toLowerCase());
     if (!found) return undefined;
     const { ref, columns, headerRows, totalsRows } = found;
     return { area: { k: 'area', sheet: found.sheet, r1: ref.top, c1: ref.left, r2: ref.bottom, c2: ref.right }, columns, headerRows, totalsRows };
@@ -190,7 +208,7 @@ export class WorkingBook {
     if (rows === 1 && cols === 1) return undefined;
     const area: Area = { top: row, left: col, bottom: row + rows - 1, right: col + cols - 1 };
     if (area.bottom > MAX_ROWS || area.right > MAX_COLS) return 'would reach beyond the edge of the sheet';
-    const table = this.book.tables.find((t) => t.sheet === sheet && intersects(t.ref, area));
+    const table = this.tables.find((t) => t.sheet === sheet && intersects(t.ref, area));
     if (table) return `would stand in table ${table.name}, where spills are not allowed`;
     if (this.book.source.data[sheet]?.merges.some((merge) => intersects(merge, area))) return 'would stand in merged cells';
     for (let r = row; r <= area.bottom; r++) {

@@ -1,4 +1,5 @@
-import { cellName } from '../book/area';
+import { cellName, intersects } from '../book/area';
+import type { BookTable } from '../book/tables';
 import type { Desk } from './Desk';
 import { storedFormula } from './functionNames';
 import { headersOf } from './Plan';
@@ -92,13 +93,32 @@ function write({ working }: Desk, entry: PlanColumn, target: PlanTarget, formula
   const { sheet, headerRow, left, first, last } = target;
   const headers = headersOf(entry);
   const neighbour = headingBeside(working, target);
-  headers.forEach((header, i) => working.setConstant(sheet, headerRow, left + i, header, neighbour));
+  const table = spills ? undefined : tableThatGrows(working, target, headers);
+  if (table) working.addTableColumn(table, headers[0], isSameEverywhere(formula, first, left) ? formula : undefined);
+  else headers.forEach((header, i) => working.setConstant(sheet, headerRow, left + i, header, neighbour));
   const rows = entry.mode === 'spill' ? last - first + 1 : 1;
   for (const [row, text] of formulasOf(entry, target, formula)) {
     working.setFormula(sheet, row, left, text, spills ? { spill: { rows, cols: headers.length } } : {});
   }
   setFormats(entry, target, working);
 }
+
+/** A table that the column stands right beside, row by row: then it becomes the table's own. Spills are not allowed in tables. */
+function tableThatGrows(working: Desk['working'], { sheet, headerRow, left, first, last }: PlanTarget, headers: readonly string[]): BookTable | undefined {
+  const { tables, book } = working;
+  if (headers.length > 1) return undefined;
+  const found = tables.find((t) =>
+    t.sheet === sheet && t.headerRows === 1 && t.ref.right + 1 === left && t.ref.top === headerRow && first === headerRow + 1 && last === t.ref.bottom - t.totalsRows);
+  if (!found || book.source.tables.find(({ name }) => name === found.name)?.kind !== 'worksheet') return undefined;
+  if (found.columns.some((c) => c.toLowerCase() === headers[0].toLowerCase())) return undefined;
+  const area = { top: headerRow, bottom: found.ref.bottom, left, right: left };
+  const taken = tables.some((t) => t.sheet === sheet && intersects(t.ref, area)) || book.source.data[sheet]!.merges.some((m) => intersects(m, area));
+  for (let row = last + 1; row <= found.ref.bottom; row++) if (working.cell(sheet, row, left)) return undefined;
+  return taken ? undefined : found;
+}
+
+/** A formula without relative addresses is what a table may offer to rows that are added later. */
+const isSameEverywhere = (formula: string, row: number, col: number): boolean => sharedFormula(formula, row, col)(row + 1, col) === formula;
 
 /** The style of the nearest heading to the left, be there a spacer column between. */
 function headingBeside(working: Desk['working'], { sheet, headerRow, left }: PlanTarget): { like: { row: number; col: number } } | undefined {

@@ -2,6 +2,7 @@ import { compile } from '../../../functions/engine/formula/compile';
 import { Evaluator } from '../../../functions/engine/formula/evaluate';
 import type { Program } from '../../../functions/engine/formula/expression';
 import { nativeNamed } from '../../../functions/engine/formula/natives';
+import { nativeIn1904 } from '../../../functions/engine/formula/natives/calendar1904';
 import { type Scalar, num } from '../../../functions/engine/formula/scalar';
 import { type Matrix, at } from '../../../functions/engine/formula/value';
 import { EngineError } from '../../../functions/engine/EngineError';
@@ -167,7 +168,7 @@ class Auditor {
   private program(formula: string): Program {
     let program = this.programs.get(formula);
     if (!program) {
-      program = compile(formula, { native: nativeNamed, isHost: () => false });
+      program = compile(formula, { native: this.working.book.date1904 ? nativeIn1904 : nativeNamed, isHost: () => false });
       this.programs.set(formula, program);
     }
     return program;

@@ -1,14 +1,17 @@
 import type { CellValue } from '../book/BookCell';
-import type { ContentEdit, StyleRequest } from '../book/Edit';
+import type { ContentEdit, Edit, StyleRequest } from '../book/Edit';
 import { placeKey, placeOf } from './places';
 import { sameValue, storedValue } from './values';
 import type { WorkingBook, WorkingCell } from './WorkingBook';
 
 /** The edits that bring the file up to the working book: only cells that differ from what is stored. */
-export function bookEdits(working: WorkingBook): ContentEdit[] {
-  const edits: ContentEdit[] = [];
+export function bookEdits(working: WorkingBook): Edit[] {
+  const { tableColumns } = working;
+  const edits: Edit[] = tableColumns.map(({ table, name, formula }) => ({ set: 'tableColumn', table, name, ...(formula !== undefined && { formula }) }));
+  const headings = new Set(tableColumns.map(({ sheet, row, col }) => placeKey(sheet, row, col)));
   const keys = new Set([...working.changed.keys(), ...working.styles.keys()]);
   for (const key of [...keys].sort((a, b) => a - b)) {
+    if (headings.has(key)) continue; // the edit of the table writes it
     const { sheet, row, col } = placeOf(key);
     const style = working.styles.get(key);
     const edit = editOf(working, sheet, row, col, style);

@@ -10,9 +10,10 @@ export function bookPort(working: WorkingBook): WorkbookPort {
   return {
     revision: () => working.revision,
     sheets: async (): Promise<PortSheet[]> => book.sheets.map(({ name, index }) => ({ name, ...working.used(index) })),
+    date1904: async () => book.date1904,
     names: async (): Promise<PortName[]> => working.allNames().map(({ name, sheet, formula }) =>
       ({ name, formula, ...(sheet !== undefined && { sheet: working.sheetName(sheet) }) })),
-    tables: async (): Promise<PortTable[]> => book.tables.map(({ name, sheet, ref, columns, headerRows, totalsRows }) =>
+    tables: async (): Promise<PortTable[]> => working.tables.map(({ name, sheet, ref, columns, headerRows, totalsRows }) =>
       ({ name, area: area(sheet, ref.top, ref.left, ref.bottom, ref.right), columns, headerRows, totalsRows })),
     hiddenRows: async (sheet) => [...(working.hiddenRows(working.sheetIndex(sheet)!))].map(([row, state]) => ({ row, filtered: state === 'filtered' })),
     read: async (areas): Promise<PortTile[]> => areas.map((asked) => ({ area: asked, cells: cellsOf(working, asked) })),

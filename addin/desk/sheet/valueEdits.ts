@@ -1,4 +1,4 @@
-import type { ContentEdit } from '../book/Edit';
+import type { ContentEdit, Edit } from '../book/Edit';
 import { tokenize } from '@borgar/fx';
 import { bookEdits } from './bookEdits';
 import { placeKey, placeOf } from './places';
@@ -9,9 +9,11 @@ import type { WorkingBook } from './WorkingBook';
  * The edits of a copy for readers without the add-in: what the library's functions gave stands there as plain values, spills
  * included; everything else is as `bookEdits` has it.
  */
-export function valueEdits(working: WorkingBook): ContentEdit[] {
+export function valueEdits(working: WorkingBook): Edit[] {
   const library = libraryCells(working);
-  const others = bookEdits(working).filter(({ sheet, row, col }) => !library.has(placeKey(sheet, row, col)));
+  const others = bookEdits(working)
+    .filter((edit) => edit.set === 'tableColumn' || !library.has(placeKey(edit.sheet, edit.row, edit.col)))
+    .map((edit): Edit => (edit.set === 'tableColumn' ? { set: 'tableColumn', table: edit.table, name: edit.name } : edit));
   const plain = [...library].sort((a, b) => a - b).map((key): ContentEdit => {
     const { sheet, row, col } = placeOf(key);
     const style = working.styles.get(key);

@@ -4,6 +4,7 @@ import type { RowState } from '../formula/rowState';
 import { type Cells, Evaluator, type TableShape, placeArea } from '../formula/evaluate';
 import type { Program } from '../formula/expression';
 import { nativeNamed } from '../formula/natives';
+import { nativeIn1904 } from '../formula/natives/calendar1904';
 import { BLANK, type ErrorCode, type Scalar, bool, err, num, text } from '../formula/scalar';
 import type { Steps } from '../formula/steps';
 import { type Area, type Matrix, type Value, at, isScalar } from '../formula/value';
@@ -73,7 +74,7 @@ export class CellGraph implements Cells {
     this.states = new CellStates(view.sheets);
     this.evaluator = new Evaluator(this);
     this.evaluator.steps.recording = options.slopes ?? true;
-    this.functions = { native: nativeNamed, isHost: options.host?.isHost ?? (() => false) };
+    this.functions = { native: view.date1904 ? nativeIn1904 : nativeNamed, isHost: options.host?.isHost ?? (() => false) };
     view.sheets.forEach((s, i) => this.sheetPlaces.set(s.name.toLowerCase(), i));
   }
 

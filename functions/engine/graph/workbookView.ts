@@ -21,6 +21,8 @@ export interface CellContent {
 /** A workbook as far as it has been read. Sheets are counted from 0, rows and columns from 1. */
 export interface WorkbookView {
   readonly sheets: readonly { readonly name: string; readonly rows: number; readonly cols: number }[];
+  /** True where the workbook counts its days from 1904. */
+  readonly date1904?: boolean;
   /** The content of a cell: null if blank, undefined if it has not been read. */
   cell(sheet: number, row: number, col: number): CellContent | null | undefined;
   /** The formula that stands in a cell, even where its value is taken as given: null if none, undefined if it has not been read. */

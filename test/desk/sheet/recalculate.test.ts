@@ -15,7 +15,7 @@ describe('native formulas', () => {
     const desk = deskOn({ A1: 2, B1: { f: 'A1*3' }, B2: { f: 'A1*3', v: 99 }, B3: { f: 'B1+B2' } });
     await desk.recalculate();
     expect(['B1', 'B2', 'B3'].map((a) => shown(desk, a))).toEqual([6, 99, 105]);
-    expect(bookEdits(desk.working).map(({ set, row, col }) => [set, row, col])).toEqual([['result', 1, 2], ['result', 3, 2]]);
+    expect(bookEdits(desk.working).map((edit) => 'row' in edit && [edit.set, edit.row, edit.col])).toEqual([['result', 1, 2], ['result', 3, 2]]);
     expect(['B1', 'B2', 'B3'].map((a) => written(desk, a))).toEqual([6, 99, 105]);
   });
 

@@ -48,7 +48,7 @@ export const differences: readonly Difference[] = [
     shown: { formula: '=SUM(IF(A:A=1,1:1))', gives: /more than can be followed/ },
   },
   { about: 'Precision as displayed, iterative calculation, data tables', here: 'results do not agree with the stored ones and are refused by name', there: 'computed' },
-  { about: 'The date system of 1904', here: 'dates are read from 1900', there: 'serial numbers are 1,462 days lower' },
+  { about: 'Functions of the calendar in a workbook that counts its days from 1904', here: 'refused', there: 'serial numbers are 1,462 days lower' },
   { about: 'TODAY, NOW, RAND, RANDBETWEEN, RANDARRAY', here: 'the stored value stands; an audit counts them', there: 'computed anew at each recalculation' },
   { about: 'Functions of other add-ins, macros, cubes, web queries', here: 'refused by name', there: 'run' },
 ];

@@ -22,6 +22,7 @@ export function memoryPort(contents: Record<string, Record<string, Entry>>, name
     revision: () => 1,
     sheets: async () => sheets.sheets,
     names: async () => Object.entries(names).map(([name]) => ({ name, formula: sheets.name(name)! })),
+    date1904: async () => false,
     tables: async () => [],
     hiddenRows: async (sheet: string) =>
       [...sheets.hiddenRows(sheets.sheets.findIndex((s) => s.name === sheet))].map(([row, state]) => ({ row, filtered: state === 'filtered' })),
