@@ -20,6 +20,7 @@ export function openBook(bytes: Uint8Array): Book {
   const workbookPart = findWorkbook(parts);
   const relations = parts.relations(workbookPart);
   const workbook = readWorkbook(parts.xml(workbookPart).text, workbookPart, relations);
+  refuseSharedParts(workbook.sheets);
   const partOf = (kind: string): string | undefined =>
     parts.find(relations.find((relation) => relation.kind === kind && !relation.external)?.target ?? '');
   const read = <T>(part: string | undefined, reader: (text: string, part: string) => T, otherwise: T): T =>
@@ -56,4 +57,14 @@ function findWorkbook(parts: Parts): string {
   }
   if (/wordprocessing|presentation/i.test(type)) throw new BookError('the file is not a workbook but another kind of office document');
   return part;
+}
+
+/** An edit of one sheet would change the other. */
+function refuseSharedParts(sheets: readonly { name: string; part: string }[]): void {
+  const owners = new Map<string, string>();
+  for (const { name, part } of sheets) {
+    const other = owners.get(part.toLowerCase());
+    if (other !== undefined) throw new BookError(`sheets ${other} and ${name} are stored in one part, ${part}`);
+    owners.set(part.toLowerCase(), name);
+  }
 }

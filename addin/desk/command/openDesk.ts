@@ -14,7 +14,7 @@ export function openDesk(path: string, bundle: FunctionBundle): Desk {
 
 const FILE_PROBLEMS: Readonly<Record<string, string>> = {
   ENOENT: 'there is no such file', EACCES: 'it may not be read or written', EISDIR: 'it is a folder', ENOTDIR: 'part of its path is no folder',
-  EPERM: 'it may not be read or written', ENOSPC: 'the disk is full', EROFS: 'the disk is read-only', EEXIST: 'a file is in the way of its folder',
+  EPERM: 'it may not be read or written', ENOSPC: 'the disk is full', EROFS: 'the disk is read-only', EFBIG: 'the file would be larger than the system allows', EMFILE: 'too many files are open', EBUSY: 'another program holds it', EEXIST: 'a file is in the way of its folder',
 };
 
 /** Why a file could not be read or written, in words; undefined for a bug. */

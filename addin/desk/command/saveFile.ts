@@ -1,13 +1,36 @@
-import { mkdirSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { randomBytes } from 'node:crypto';
+import { closeSync, fsyncSync, mkdirSync, openSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { basename, dirname, join } from 'node:path';
+import { BookError } from '../book/BookError';
+import { reasonOf } from './openDesk';
 
-/** Writes a file as a whole or not at all: through a temporary file beside it and a rename. Its folder is made where needed. */
+/**
+ * Writes a file as a whole or not at all: through a temporary file beside it, which has reached the disk before it takes the name. Its
+ * folder is made where needed.
+ *
+ * @throws BookError that names the file and says why it could not be written; then whatever stood there stands there still.
+ */
 export function saveFile(path: string, bytes: Uint8Array): void {
-  const folder = dirname(path);
-  mkdirSync(folder, { recursive: true });
-  const temporary = join(folder, `.${basename(path)}.${process.pid}.tmp`);
   try {
-    writeFileSync(temporary, bytes);
+    mkdirSync(dirname(path), { recursive: true });
+    writeAndRename(path, bytes);
+  } catch (problem) {
+    const reason = reasonOf(problem);
+    if (reason === undefined) throw problem;
+    throw new BookError(`${path} was not written: ${reason}`);
+  }
+}
+
+function writeAndRename(path: string, bytes: Uint8Array): void {
+  const temporary = join(dirname(path), `.${basename(path)}.${randomBytes(6).toString('hex')}.tmp`);
+  const file = openSync(temporary, 'wx');
+  try {
+    try {
+      writeFileSync(file, bytes);
+      fsyncSync(file);
+    } finally {
+      closeSync(file);
+    }
     renameSync(temporary, path);
   } catch (problem) {
     rmSync(temporary, { force: true });
