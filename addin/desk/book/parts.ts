@@ -81,15 +81,16 @@ export class Parts {
     });
   }
 
-  /** A relationship's target as a part name: the stored spelling where the part exists. */
+  /**
+   * A relationship's target as a part name: the stored spelling where the part exists. What would lead above the package stays in it
+   * (RFC 3986, 5.2.4); LibreOffice writes such targets.
+   */
   private resolve(source: string, target: string): string {
     const path = target.split('#')[0];
     const segments = path.startsWith('/') ? [] : source.split('/').slice(0, -1);
     for (const segment of path.split('/')) {
-      if (segment === '..') {
-        if (segments.length === 0) throw new BookError(`a relationship of ${source || 'the package'} leaves the archive: ${target.slice(0, 60)}`);
-        segments.pop();
-      } else if (segment !== '' && segment !== '.') segments.push(segment);
+      if (segment === '..') segments.pop();
+      else if (segment !== '' && segment !== '.') segments.push(segment);
     }
     const name = segments.join('/');
     return this.find(name) ?? this.find(decodePercent(name)) ?? name;

@@ -108,15 +108,31 @@ describe('a dangerous archive is refused:', () => {
     expect(refusal(buildBook({ extra: { [name]: strToU8('x') } }))).toBe(`the archive holds a part with a forbidden name: ${JSON.stringify(name)}`);
   });
 
-  test('a relationship that leaves the archive', () => {
+  test('a relationship that would leave the archive finds no part outside it', () => {
     const files = bookFiles({});
-    files['_rels/.rels'] = strToU8(new TextDecoder().decode(files['_rels/.rels'] as Uint8Array).replace('xl/workbook', '../xl/workbook'));
-    expect(refusal(zipSync(files))).toBe('a relationship of the package leaves the archive: ../xl/workbook.xml');
+    const withTarget = (part: string, from: string, to: string): Uint8Array => {
+      const rels = new TextDecoder().decode(files[part] as Uint8Array).replace(from, to);
+      return zipSync({ ...files, [part]: strToU8(rels) });
+    };
+    expect(refusal(withTarget('xl/_rels/workbook.xml.rels', 'worksheets/sheet1.xml', '../../../etc/passwd'))).toBe('part etc/passwd is missing');
+    expect(openBook(withTarget('_rels/.rels', 'xl/workbook', '../xl/workbook')).sheets.length).toBe(1); // as LibreOffice writes some
+  });
+
+  test('two sheets in one part', () => {
+    const files = bookFiles({ sheets: [{ name: 'A' }, { name: 'B' }] });
+    const rels = new TextDecoder().decode(files['xl/_rels/workbook.xml.rels'] as Uint8Array).replace('sheet2.xml', 'sheet1.xml');
+    expect(refusal(zipSync({ ...files, 'xl/_rels/workbook.xml.rels': strToU8(rels) }))).toBe('sheets A and B are stored in one part, xl/worksheets/sheet1.xml');
   });
 
   test('two parts whose names differ in case only', () => {
     expect(refusal(buildBook({ extra: { 'xl/Workbook.xml': strToU8('x') } }))).toBe('the archive holds part xl/Workbook.xml twice');
   });
+});
+
+test('a million blank cells with a style are read, and do not count as used', () => {
+  const row = (r: number): string => `<row r="${r}">${'<c s="1"/>'.repeat(10_000)}</row>`;
+  const book = openBook(buildBook({ sheets: [{ xml: `<sheetData>${Array.from({ length: 100 }, (_, i) => row(i + 1)).join('')}</sheetData>` }] }));
+  expect([book.used(0), book.styleAt(0, 100, 10_000), book.styleAt(0, 100, 10_001)]).toEqual([{ rows: 0, cols: 0 }, 1, 0]);
 });
 
 describe('a workbook', () => {
