@@ -8,11 +8,11 @@ export const glasswareFunctions = [
   each({
     name: 'GLASS_TOL',
     family: 'Evidence to standard uncertainty',
-    help: 'Tolerance in mL of a volumetric flask, one-mark pipette or burette by its standard. Most tables are from memory: check them against your standard or certificate.',
+    help: 'Tolerance in mL of a flask, one-mark pipette, burette, cylinder or piston pipette by its standard. Most tables are from memory: check them against your standard or certificate.',
     parameters: {
-      ware: parsed(readWare, { help: 'flask, pipette (one mark) or burette' }),
+      ware: parsed(readWare, { help: 'flask, pipette (one mark), burette, cylinder, piston (systematic error) or piston random (a standard deviation)' }),
       capacity: number({ help: 'Nominal capacity in mL', above: 0, leads: true }),
-      class: choice({ help: 'A (default) or B', choices: ['A', 'B'] }),
+      class: choice({ help: 'A (default) or B; piston pipettes have none', choices: ['A', 'B'] }),
       standard: choice({ help: 'ISO (default) or ASTM', choices: ['ISO', 'ASTM'] }),
       division: number({ help: 'Scale division in mL, for burettes of which there are several', above: 0, optional: true }),
       full: flag('TRUE spills the tolerance, the standard with its edition, and how sure the figure is'),

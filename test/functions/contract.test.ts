@@ -58,7 +58,7 @@ const wantsOneOf = new Set(['UNC_CONFORM', 'UNC_DECIDE']);
 
 /** What a wrong hand or a wrong cell may put into any argument. */
 const wrong: Given[] = [
-  'abc', '1', ' ', true, false, 0, -1, 1.5, 1e300, -1e300, 1e-300, null,
+  'abc', '1', '12.5', '12,5', '', ' ', true, false, 0, -1, 1.5, 1e300, -1e300, 1e-300, null,
   { error: '#N/A' }, { error: '#DIV/0!' }, { error: '#REF!' },
   [1, 2, 3, 4, 5, 6, 7], [[1, 2, 3]], [['x', null], [0, { error: '#N/A' }]], [null, null, null],
 ];
@@ -114,6 +114,23 @@ const isGood = (cell: Shown): boolean =>
 /** An error that shows a message, which begins with the function and comes from no fault of the library. */
 const isWorded = (name: string, cell: Shown): boolean =>
   typeof cell === 'string' && /^(#VALUE!|#N\/A) /.test(cell) && cell.includes(` ${name}: `) && !cell.includes('fault in the library');
+
+describe('255 arguments', () => {
+  const many = (n: number, one: readonly Given[]): Given[] => Array.from({ length: n }, (_, i) => one[i % one.length]);
+  let call: (id: string, ...args: Given[]) => Promise<Shown[][]>;
+  beforeAll(async () => {
+    call = await excel({ blanks: 'zero', parameterAddresses: true, port: memoryPort({ S: sheet }) });
+  });
+
+  test.each(registry.filter((d) => Object.values(d.parameters).some((p) => p.repeating)).map((d) => [d.name, d] as const))('%s takes them, or says in words what is wrong', async (name, declaration) => {
+    const fixed = Object.values(declaration.parameters).findIndex((p) => p.repeating);
+    const head = working[name].slice(0, fixed);
+    for (const count of [254, 255]) {
+      const cells = (await call(name, ...head, ...many(count - fixed, working[name].slice(fixed)))).flat();
+      expect(cells.every((c) => c === '' || isGood(c) || isWorded(name, c)), JSON.stringify(cells.slice(0, 2))).toBe(true);
+    }
+  });
+});
 
 describe('what a body does wrong', () => {
   const odd = (body: () => number): Declaration =>

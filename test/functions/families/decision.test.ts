@@ -45,3 +45,11 @@ describe('scores', () => {
     expect(await call('SCORE_EN', 9.5, 0.6, 10, 0.8, true)).toEqual([[-0.5, 'satisfactory']]);
   });
 });
+
+// The z values of JCGM 106:2012, 7.3 (from memory); exact by the normal distribution.
+test.each([[0.8, 0.84], [0.9, 1.28], [0.95, 1.64], [0.99, 2.33], [0.999, 3.09]])('a conformance probability of %d takes z = %d', async (p, z) => {
+  const [[found]] = (await call('UNC_CONFORM', 0, 1, undefined, z)) as number[][];
+  expect(Math.abs(found - p)).toBeLessThan(0.002);
+  const [[limit]] = (await call('UNC_GUARD', 0, 1, 'upper', 1 - p)) as number[][];
+  expect(limit).toBeCloseTo(-z, 1.9);
+});
