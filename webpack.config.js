@@ -83,4 +83,23 @@ const commandBundle = {
   plugins: [...stamp(), new webpack.BannerPlugin({ banner: '#!/usr/bin/env node', raw: true }), new StampBuild(), new Executable()],
 };
 
-export default [functionsBundle, ...(existsSync(commandEntry) ? [commandBundle] : [])];
+const deskBundle = {
+  ...common('es2022'),
+  name: 'desk',
+  target: ['web', 'es2022'],
+  entry: path('addin/desk/page/main.ts'),
+  output: { path: path('dist'), filename: 'desk.js', chunkFilename: 'desk-[name].js', chunkLoadingGlobal: 'rootsumDesk', publicPath: 'auto' },
+  optimization: { ...common('es2022').optimization, chunkIds: 'named' },
+  plugins: [new webpack.DefinePlugin({ ROOTSUM_VERSION: JSON.stringify(version), ROOTSUM_BUILD: JSON.stringify(version) })],
+};
+
+const excelEntry = path('addin/excel/entry.ts');
+
+const excelBundle = {
+  ...deskBundle,
+  name: 'excel',
+  entry: excelEntry,
+  output: { path: path('dist'), filename: 'excel.js', chunkFilename: 'excel-[name].js', chunkLoadingGlobal: 'rootsumExcel', publicPath: 'auto' },
+};
+
+export default [functionsBundle, deskBundle, ...(existsSync(excelEntry) ? [excelBundle] : []), ...(existsSync(commandEntry) ? [commandBundle] : [])];

@@ -7,10 +7,10 @@ import { fileURLToPath } from 'node:url';
 const root = fileURLToPath(new URL('../..', import.meta.url));
 
 /** What everything built is made from. */
-const SOURCES = ['addin', 'functions', 'manifest', 'package.json', 'webpack.config.js'];
+const SOURCES = ['addin', 'functions', 'manifest', 'reference', 'package.json', 'webpack.config.js'];
 
 /** What a build must leave behind. */
-const OUTPUTS = ['functions.js', 'functions.json', 'rootsum.cjs'];
+const OUTPUTS = ['functions.js', 'functions.json', 'rootsum.cjs', 'desk.js', 'index.html', 'demo.xlsx', 'reference.html', 'manifest.xml'];
 
 /** The folder that holds what is built. */
 export const distFolder = join(root, 'dist');
@@ -35,6 +35,9 @@ export async function buildIfStale(say = () => {}) {
     const begun = new Date();
     const webpack = join(root, 'node_modules', 'webpack', 'bin', 'webpack.js');
     execFileSync(process.execPath, [webpack, '--config', 'webpack.config.js', '--output-path', lock], { cwd: root, stdio: ['ignore', 'ignore', 'inherit'] });
+    const tsx = join(root, 'node_modules', 'tsx', 'dist', 'cli.mjs');
+    for (const script of ['manifest/writeManifest.ts', 'reference/writeReference.ts', 'addin/desk/writeStatic.ts'])
+      execFileSync(process.execPath, [tsx, script, lock], { cwd: root, stdio: ['ignore', 'ignore', 'inherit'] });
     for (const name of readdirSync(lock, { recursive: true, encoding: 'utf8' })) {
       if (statSync(join(lock, name)).isDirectory()) mkdirSync(join(distFolder, name), { recursive: true });
       else {

@@ -99,6 +99,10 @@ export class Book {
     return this.source.styles.formats[style] ?? 'General';
   }
 
+  isBold(style: number): boolean {
+    return this.source.styles.bold[style] ?? false;
+  }
+
   /** Whether cells of this style hide their formula once their sheet is protected. */
   isHiddenStyle(style: number): boolean {
     return this.source.styles.hidden[style] ?? false;

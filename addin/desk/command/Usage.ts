@@ -10,6 +10,7 @@ export const USAGE = `rootsum: worksheet functions for measurement uncertainty, 
                                                   add the columns of a plan to workbooks
   rootsum audit BOOK.xlsx... [--json]             tell whether the formulas of workbooks are read right
   rootsum functions [--json]                      list the functions
+  rootsum serve [BOOK.xlsx] [--port N]            show a workbook in the browser, the pane beside it
 
   rootsum COMMAND --help                          more about one command
 
@@ -51,4 +52,13 @@ export const FUNCTIONS_HELP = `rootsum functions [--json]
 Lists the functions with their arguments.
 
   --json            the metadata as Excel reads it (functions.json)
+  --help            this text`;
+
+export const SERVE_HELP = `rootsum serve [BOOK.xlsx] [--port N]
+
+Serves the desk's page to this machine: the workbook as a grid, formulas with completion, the task pane
+beside it. Without a workbook it opens the demo. Nothing leaves the machine, and the file is not
+changed: the page saves a new one.
+
+  --port N          the port, 3040 unless another is given; 0 takes a free one
   --help            this text`;

@@ -7,6 +7,7 @@ import { nativeNamed } from '../../../functions/engine/formula/natives';
 import { bookEdits } from './bookEdits';
 import { bookPort } from './bookPort';
 import { createFunctionHost } from './functionHost';
+import type { LoadedFunctions } from './functionHost';
 import { FunctionNames } from './functionNames';
 import { needsArray } from './needsArray';
 import { Recalculator } from './recalculate';
@@ -16,8 +17,9 @@ import { WorkingBook } from './WorkingBook';
 
 /** The built functions: what Excel loads. */
 export interface FunctionBundle {
-  /** Text of functions.js. */
-  readonly source: string;
+  /** Text of functions.js; or what it associated when it was loaded as a script. */
+  readonly source?: string;
+  readonly loaded?: LoadedFunctions;
   /** Text of functions.json. */
   readonly metadata: string;
 }

@@ -71,6 +71,11 @@ export class WorkingBook {
     return this.extents[sheet];
   }
 
+  /** One number for a cell, by which `styles` knows it. */
+  keyOf(sheet: number, row: number, col: number): number {
+    return placeKey(sheet, row, col);
+  }
+
   sheetIndex(name: string): number | undefined {
     return this.sheetPlaces.get(name.toLowerCase());
   }

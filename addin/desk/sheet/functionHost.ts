@@ -18,8 +18,10 @@ export type HostResult =
   | { readonly ok: false; readonly error: HostError };
 
 export interface FunctionHostOptions {
-  /** Text of the built functions bundle. */
-  readonly source: string;
+  /** Text of the built functions bundle, which is then run in a scope of its own. */
+  readonly source?: string;
+  /** Or what the bundle associated when it was loaded as a script: where texts may not be run. */
+  readonly loaded?: LoadedFunctions;
   /** Text of the built functions.json. */
   readonly metadata: string;
   readonly port?: WorkbookPort | (() => WorkbookPort | undefined);
@@ -28,6 +30,12 @@ export interface FunctionHostOptions {
   readonly blanks?: 'null' | 'zero';
   /** Whether the host knows addresses of arguments. Default true. */
   readonly parameterAddresses?: boolean;
+}
+
+export interface LoadedFunctions {
+  readonly bodies: ReadonlyMap<string, FunctionBody>;
+  /** Says through which port the functions read from now on. */
+  usePort(port: FunctionHostOptions['port']): void;
 }
 
 export interface FunctionHost {
@@ -78,7 +86,7 @@ export function createFunctionHost(options: FunctionHostOptions): FunctionHost {
   };
 }
 
-type FunctionBody = (...args: unknown[]) => unknown;
+export type FunctionBody = (...args: unknown[]) => unknown;
 
 /** The host's error class: what the bundle knows as CustomFunctions.Error. */
 class HostErrorObject {
@@ -88,18 +96,24 @@ class HostErrorObject {
   ) {}
 }
 
+/** What the bundle knows by the name CustomFunctions: it puts its functions into `bodies`. */
+export const customFunctions = (bodies: Map<string, FunctionBody>): object => ({
+  associate: (id: string, body: FunctionBody) => void bodies.set(id, body),
+  Error: HostErrorObject,
+  ErrorCode: {
+    invalidValue: '#VALUE!', notAvailable: '#N/A', invalidNumber: '#NUM!', divisionByZero: '#DIV/0!',
+    nullReference: '#NULL!', invalidName: '#NAME?', invalidReference: '#REF!',
+  },
+});
+
 /** Evaluates the bundle in a scope of its own: its free names are parameters, nothing is put on the global object. */
-function load({ source, port, settings }: FunctionHostOptions): ReadonlyMap<string, FunctionBody> {
+function load({ source, loaded, port, settings }: FunctionHostOptions): ReadonlyMap<string, FunctionBody> {
+  if (loaded) {
+    loaded.usePort(port);
+    return loaded.bodies;
+  }
   const bodies = new Map<string, FunctionBody>();
-  const customFunctions = {
-    associate: (id: string, body: FunctionBody) => void bodies.set(id, body),
-    Error: HostErrorObject,
-    ErrorCode: {
-      invalidValue: '#VALUE!', notAvailable: '#N/A', invalidNumber: '#NUM!', divisionByZero: '#DIV/0!',
-      nullReference: '#NULL!', invalidName: '#NAME?', invalidReference: '#REF!',
-    },
-  };
-  new Function('CustomFunctions', 'RootsumPort', 'RootsumHost', source)(customFunctions, port, settings);
+  new Function('CustomFunctions', 'RootsumPort', 'RootsumHost', source!)(customFunctions(bodies), port, settings);
   return bodies;
 }
 

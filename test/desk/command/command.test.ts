@@ -183,8 +183,8 @@ describe('usage', () => {
   });
 
   it.each([
-    [[], 'a command is needed: recalc, apply, audit or functions'],
-    [['fly'], 'there is no command fly: use recalc, apply, audit or functions'],
+    [[], 'a command is needed: recalc, apply, audit, functions or serve'],
+    [['fly'], 'there is no command fly: use recalc, apply, audit, functions or serve'],
     [['recalc'], 'recalc needs one workbook, got 0'],
     [['recalc', 'a.xlsx'], 'recalc needs --out with the name of the new file'],
     [['recalc', 'a.xlsx', '--fast'], "Unknown option '--fast'"],

@@ -1,0 +1,231 @@
+import { mkdirSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { createRequire } from 'node:module';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import type { Page } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { openBook } from '../../addin/desk/book/openBook';
+import { browserPath, openPage, startDesk } from './openPage';
+import type { Desk } from './openPage';
+
+const axe = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
+const pictures = fileURLToPath(new URL('../../out/pictures/', import.meta.url));
+const folder = mkdtempSync(join(tmpdir(), 'browser-'));
+let demo: Desk;
+let small: Desk;
+
+if (!browserPath) console.log('No Chromium is installed: the tests in a browser are left out (apt install chromium)');
+
+const cell = (page: Page, row: number, col: number) => page.locator(`td[data-row="${row}"][data-col="${col}"]`);
+const tab = (page: Page, name: string) => page.getByRole('tab', { name, exact: true }).click();
+const step = (page: Page, name: string) => page.locator('.rootsum-pane').getByRole('tab', { name }).click();
+const line = (page: Page) => page.locator('.rootsum-pane .line');
+const paneText = (page: Page) => page.locator('.rootsum-pane .panel');
+
+/** Clicks the first cell and, with shift, the last. */
+async function select(page: Page, from: [number, number], to = from): Promise<void> {
+  await cell(page, ...from).click();
+  if (to !== from) await cell(page, ...to).click({ modifiers: ['Shift'] });
+}
+
+async function enter(page: Page, at: [number, number], text: string): Promise<void> {
+  await cell(page, ...at).click();
+  await page.keyboard.press('F2');
+  await page.getByLabel('Content of the cell').fill(text);
+  await page.keyboard.press('Enter');
+}
+
+describe.runIf(browserPath)('the desk in a browser', () => {
+  beforeAll(async () => {
+    mkdirSync(pictures, { recursive: true });
+    [demo, small] = await Promise.all([startDesk(), startDesk(fileURLToPath(new URL('../corpus/features/openpyxl.xlsx', import.meta.url)))]);
+  });
+  afterAll(async () => {
+    await Promise.all([demo?.close(), small?.close()]);
+    rmSync(folder, { recursive: true });
+  });
+
+  it('opens the demo under a strict policy without a complaint, and shows its numbers as the formats say', async () => {
+    const { page, complaints } = await openPage(demo);
+    expect(await cell(page, 5, 4).textContent()).toBe('222.9');
+    await tab(page, 'Hardness');
+    expect(await cell(page, 6, 9).textContent()).toMatch(/^\d+\.\d$/);
+    expect(complaints).toEqual([]);
+    await page.close();
+  });
+
+  it('a person adds evidence, carries it, looks at the budget, reports, and saves the workbook with all else in it', async () => {
+    const { page, complaints } = await openPage(small);
+    await tab(page, 'Results');
+    // evidence
+    await select(page, [4, 4], [15, 4]);
+    await page.getByRole('button', { name: 'Read the selection' }).click();
+    await expect.poll(() => line(page).textContent()).toBe('Read as: Tolerance');
+    expect(await paneText(page).locator('tbody tr').count()).toBe(5);
+    await page.getByRole('button', { name: 'Write the column' }).click();
+    await expect.poll(() => line(page).textContent()).toBe('u(Tolerance) written into Results!F4:F15');
+    await page.screenshot({ path: join(pictures, 'evidence.png') });
+    // carry
+    await step(page, '2 Carry');
+    await select(page, [4, 5], [15, 5]);
+    await page.getByRole('button', { name: 'Follow the selection' }).click();
+    await expect.poll(() => line(page).textContent()).toMatch(/^3 groups of input cells found; 3 without evidence/);
+    const volume = page.locator('fieldset', { hasText: 'Volume' });
+    await volume.getByLabel('Evidence (cells with u)').fill('F4:F15');
+    await page.getByRole('button', { name: 'Write the column' }).click();
+    await expect.poll(() => line(page).textContent()).toBe('u(Result) written into Results!G4:G15');
+    await page.screenshot({ path: join(pictures, 'carry.png') });
+    // budget, live
+    await step(page, '3 Budget');
+    await cell(page, 5, 5).click();
+    await expect.poll(() => paneText(page).locator('h3').textContent()).toBe('Results!E5');
+    expect(await paneText(page).locator('svg[role="img"]').getAttribute('aria-label')).toMatch(/100\.0 %/);
+    await cell(page, 6, 7).click();
+    await expect.poll(() => paneText(page).locator('h3').textContent()).toBe('Results!E6');
+    await page.screenshot({ path: join(pictures, 'budget.png') });
+    // report
+    await step(page, '4 Report');
+    await page.getByLabel('Unit').fill('mg/L');
+    await page.getByLabel('Upper limit').fill('60');
+    await page.getByLabel('Upper limit').press('Tab');
+    await expect.poll(() => paneText(page).locator('tbody tr').first().textContent()).toMatch(/± .* mg\/L, k = 2(pass|fail|conditional)/);
+    await page.getByRole('button', { name: 'Write the columns' }).click();
+    await expect.poll(() => line(page).textContent()).toMatch(/^Decision, Rule written/);
+    await page.screenshot({ path: join(pictures, 'report.png') });
+    // check
+    await step(page, '5 Check');
+    await page.getByRole('button', { name: 'Audit now' }).click();
+    await expect.poll(() => paneText(page).textContent()).toContain('12 formulas followed, 12 agree');
+    await page.screenshot({ path: join(pictures, 'check.png') });
+    const [planFile] = await Promise.all([page.waitForEvent('download'), page.getByRole('button', { name: 'Save the plan' }).click()]);
+    await planFile.saveAs(join(folder, 'plan.json'));
+    const plan = JSON.parse(readFileSync(join(folder, 'plan.json'), 'utf8')) as { columns: { header: unknown; anchor: string }[] };
+    expect(plan.columns.map((c) => c.anchor)).toEqual(['F3', 'G3', 'H3', 'I3']);
+    // the saved workbook
+    const [download] = await Promise.all([page.waitForEvent('download'), page.getByRole('button', { name: 'Save', exact: true }).click()]);
+    expect(download.suggestedFilename()).toBe('openpyxl-rootsum.xlsx');
+    await download.saveAs(join(folder, 'saved.xlsx'));
+    const book = openBook(readFileSync(join(folder, 'saved.xlsx')));
+    const [factor, tolerance, u] = [3, 4, 7].map((col) => book.cell(0, 4, col)!.value as number);
+    // E = B·C·1.5 and u(B) = D/√3
+    expect(u).toBeCloseTo((factor * 1.5 * tolerance) / Math.sqrt(3), 12);
+    expect(book.cell(0, 3, 7)?.value).toBe('u(Result)');
+    expect(book.cell(0, 4, 7)).toMatchObject({ formula: '_xldudf_ROOTSUM_UNC_CARRY(E4:E15,B4:B15,F4:F15)', array: { dynamic: true } });
+    expect(complaints).toEqual([]);
+    await page.close();
+  });
+
+  it('nothing is written over without asking, and everything the pane wrote can be taken back', async () => {
+    const { page } = await openPage(small);
+    await tab(page, 'Results');
+    await select(page, [4, 4], [15, 4]);
+    await page.getByRole('button', { name: 'Read the selection' }).click();
+    await page.getByLabel('Heading goes to').fill('E3');
+    await page.getByRole('button', { name: 'Write the column' }).click();
+    await expect.poll(() => line(page).textContent()).toMatch(/^E3, E4, E5 and 10 more are occupied\. Press again/);
+    const before = await cell(page, 4, 5).textContent();
+    await page.getByRole('button', { name: 'Write the column' }).click();
+    await expect.poll(() => line(page).textContent()).toBe('u(Tolerance) written into Results!E4:E15');
+    expect(await cell(page, 3, 5).textContent()).toBe('u(Tolerance)');
+    await page.locator('.rootsum-pane').getByRole('button', { name: 'Undo' }).click();
+    await expect.poll(() => cell(page, 3, 5).textContent()).toBe('Result');
+    expect(await cell(page, 4, 5).textContent()).toBe(before);
+    expect(await cell(page, 9, 5).textContent()).not.toBe('');
+    await page.close();
+  });
+
+  it('edits by keys: constants, formulas that recalculate, completion, errors with their words, undo, fill down', async () => {
+    const { page } = await openPage(small);
+    await tab(page, 'Results');
+    await enter(page, [4, 2], '20');
+    await expect.poll(() => cell(page, 4, 5).textContent()).toBe((20 * Number(await cell(page, 4, 3).textContent()) * 1.5).toFixed(3));
+    // completion with help for the argument
+    await cell(page, 4, 9).click();
+    await page.keyboard.type('=stdu_from_to');
+    await expect.poll(() => page.getByRole('option').first().textContent()).toMatch(/^ROOTSUM\.STDU_FROM_TOL/);
+    await page.keyboard.press('Tab');
+    expect(await page.getByLabel('Content of the cell').inputValue()).toBe('=ROOTSUM.STDU_FROM_TOL(');
+    expect(await page.locator('.hint').textContent()).toMatch(/tolerance/);
+    await page.keyboard.type('D4)');
+    await page.keyboard.press('Enter');
+    await expect.poll(() => cell(page, 4, 9).textContent()).toMatch(/^0\.\d+/);
+    // an error has its words on hover and when the cell is reached
+    await enter(page, [5, 9], '=ROOTSUM.STDU_FROM_TOL(-1)');
+    await expect.poll(() => cell(page, 5, 9).textContent()).toBe('#VALUE!');
+    expect(await cell(page, 5, 9).getAttribute('title')).toMatch(/^STDU_FROM_TOL: tolerance must be/);
+    await cell(page, 5, 9).click();
+    await expect.poll(() => page.locator('.status').textContent()).toMatch(/^STDU_FROM_TOL: tolerance must be/);
+    // fill down, then back
+    await select(page, [4, 9], [8, 9]);
+    await page.keyboard.press('Control+d');
+    await expect.poll(() => cell(page, 8, 9).textContent()).toMatch(/^0\.\d+/);
+    await cell(page, 8, 9).focus();
+    await page.keyboard.press('Control+z');
+    await expect.poll(() => cell(page, 8, 9).textContent()).toBe('');
+    await page.close();
+  });
+
+  it('copies and pastes as text with tabs', async () => {
+    const { page } = await openPage(small);
+    await tab(page, 'Results');
+    await select(page, [4, 1], [5, 2]);
+    const copied = await page.evaluate(() => {
+      const data = new DataTransfer();
+      document.activeElement!.dispatchEvent(new ClipboardEvent('copy', { clipboardData: data, bubbles: true, cancelable: true }));
+      return data.getData('text/plain');
+    });
+    expect(copied.split('\n').map((l) => l.split('\t').length)).toEqual([2, 2]);
+    await cell(page, 20, 9).click();
+    await page.evaluate(() => {
+      const data = new DataTransfer();
+      data.setData('text/plain', '1.5\tone\r\n=I20*2\t"two\nlines"\r\n');
+      document.activeElement!.dispatchEvent(new ClipboardEvent('paste', { clipboardData: data, bubbles: true, cancelable: true }));
+    });
+    await expect.poll(() => cell(page, 21, 9).textContent()).toBe('3');
+    expect(await cell(page, 21, 10).textContent()).toBe('two\nlines');
+    await page.close();
+  });
+
+  it('opens a workbook that is dropped or chosen, and refuses one in words without losing the one that is open', async () => {
+    const { page } = await openPage(demo);
+    await page.setInputFiles('#file', { name: 'no.xlsx', mimeType: 'application/octet-stream', buffer: Buffer.from('this is no workbook') });
+    await expect.poll(() => page.locator('.status').textContent()).toBe('no.xlsx was not opened: the file is not a zip archive, so it is not an .xlsx workbook');
+    expect(await page.locator('.book').textContent()).toBe('demo.xlsx');
+    await page.setInputFiles('#file', fileURLToPath(new URL('../corpus/books/gradebook-xlsxwriter.xlsx', import.meta.url)));
+    await expect.poll(() => page.locator('.book').textContent()).toBe('gradebook-xlsxwriter.xlsx');
+    await page.close();
+  });
+
+  it('walks through 50,000 rows by keys, drawing those in view alone', async () => {
+    const { page } = await openPage(small);
+    await page.evaluate(() => document.querySelector<HTMLElement>('td[data-row="1"]')!.focus());
+    await enter(page, [1, 12], 'end');
+    await page.locator('.scroller').evaluate((s) => { s.scrollTop = 300; });
+    await expect.poll(() => page.locator('td[data-col="1"]').count()).toBeLessThan(80);
+    await page.close();
+  });
+
+  describe.each(['light', 'dark'] as const)('%s', (scheme) => {
+    it('every view passes the accessibility rules, at both widths', async () => {
+      const { page } = await openPage(small, { colorScheme: scheme });
+      await tab(page, 'Results');
+      for (const [name, width] of [['wide', 1440], ['narrow', 700]] as const) {
+        await page.setViewportSize({ width, height: 900 });
+        for (const title of ['1 Evidence', '2 Carry', '3 Budget', '4 Report', '5 Check']) {
+          await step(page, title);
+          if (title === '2 Carry') {
+            await select(page, [4, 5], [8, 5]);
+            await page.getByRole('button', { name: 'Follow the selection' }).click();
+            await expect.poll(() => page.locator('fieldset').count()).toBeGreaterThan(0);
+          }
+          // the page's own policy forbids scripts from elsewhere; the tool comes through the debugger
+          const found = await page.evaluate(`(() => { ${axe}; return axe.run(document, { resultTypes: ['violations'] }); })()`) as { violations: { id: string; nodes: { html: string; failureSummary?: string }[] }[] };
+          expect(found.violations.map((v) => `${title} ${name} ${v.id}: ${v.nodes[0].html.slice(0, 200)} ${v.nodes[0].failureSummary ?? ''}`)).toEqual([]);
+          await page.screenshot({ path: join(pictures, `${title.slice(2).toLowerCase()}-${scheme}-${name}.png`) });
+        }
+      }
+      await page.close();
+    });
+  });
+});
