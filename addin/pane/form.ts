@@ -27,3 +27,11 @@ export function table(caption: string, headings: readonly string[], rows: readon
 
 /** A number with so many significant digits, for reading. */
 export const figures = (value: unknown, digits = 4): string => (typeof value === 'number' ? String(Number(value.toPrecision(digits))) : String(value ?? ''));
+
+/** The number format that shows at least three significant digits of the least of some uncertainties. */
+export function formatOf(values: readonly unknown[]): string | undefined {
+  const sizes = values.filter((v): v is number => typeof v === 'number' && v > 0);
+  if (sizes.length === 0) return undefined;
+  const places = Math.min(12, Math.max(0, 2 - Math.floor(Math.log10(Math.min(...sizes)))));
+  return places === 0 ? '0' : `0.${'0'.repeat(places)}`;
+}

@@ -79,10 +79,10 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     // budget, live
     await step(page, '3 Budget');
     await cell(page, 5, 5).click();
-    await expect.poll(() => paneText(page).locator('h3').textContent()).toBe('Results!E5');
+    await expect.poll(() => paneText(page).locator('h2').textContent()).toBe('Results!E5');
     expect(await paneText(page).locator('svg[role="img"]').getAttribute('aria-label')).toMatch(/100\.0 %/);
     await cell(page, 6, 7).click();
-    await expect.poll(() => paneText(page).locator('h3').textContent()).toBe('Results!E6');
+    await expect.poll(() => paneText(page).locator('h2').textContent()).toBe('Results!E6');
     await page.screenshot({ path: join(pictures, 'budget.png') });
     // report
     await step(page, '4 Report');

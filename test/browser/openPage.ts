@@ -39,6 +39,6 @@ export async function openPage({ browser, address }: Desk, options: Parameters<B
   page.on('console', (message) => { if (message.type() === 'error' && !message.text().includes('404')) complaints.push(message.text()); });
   page.on('pageerror', (error) => complaints.push(String(error)));
   await page.goto(address);
-  await page.waitForSelector('.rootsum-pane [role="tab"]', { timeout: 30_000 });
+  await page.waitForSelector('.rootsum-pane [role="tab"]', { timeout: 10_000 });
   return { page, complaints };
 }

@@ -29,7 +29,7 @@ export class FormulaBar {
       oninput: () => this.suggest(), onclick: () => this.suggest(), onkeydown: (event: KeyboardEvent) => this.onKey(event),
       onblur: () => { if (this.input.value !== this.shown) this.commit('stay'); else this.close(); },
     });
-    this.element = h('div', { class: 'formula' }, this.place, h('div', { class: 'entry' }, this.input, this.list), this.hint);
+    this.element = h('section', { class: 'formula', 'aria-label': 'Formula line' }, this.place, h('div', { class: 'entry' }, this.input, this.list), this.hint);
   }
 
   /** Shows what a cell holds. */

@@ -6,6 +6,7 @@ export function cellText(value: CellValue | undefined, numberFormat: string): st
   if (value === undefined) return '';
   if (typeof value === 'object') return value.error;
   if (typeof value === 'boolean') return value ? 'TRUE' : 'FALSE';
+  if (/^general$/i.test(numberFormat)) return typeof value === 'string' ? value : String(Number(value.toPrecision(10))); // as many digits as a cell of ordinary width shows
   try {
     return format(numberFormat, value);
   } catch {

@@ -45,7 +45,7 @@ export function budgetStep(context: StepContext): Step {
     const sources = rows.filter((r) => typeof r[component] === 'number' && typeof r[share] === 'number' && r[2] !== '');
     const rest = rows.filter((r) => !sources.includes(r) && r[0] !== '');
     fill(view,
-      h('h3', {}, addressOf(current!.result)),
+      h('h2', {}, addressOf(current!.result)),
       barPicture(sources.map((r) => ({ label: String(r[0]), share: r[share] as number }))),
       table('Budget', ['Source', 'Component', 'Share'], sources.map((r) => [String(r[0]), figures(r[component]), `${((r[share] as number) * 100).toFixed(1)} %`])),
       h('dl', {}, ...rest.flatMap((r) => [h('dt', {}, String(r[0])), h('dd', {}, r.slice(1).filter((c) => c !== '').map((c) => problemOf(c) ?? figures(c, 5)).join('  '))])));

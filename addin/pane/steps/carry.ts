@@ -3,7 +3,7 @@ import { addressOf, areaOf } from '../areas';
 import { callLibrary, problemOf } from '../callLibrary';
 import { cellsOf, freeColumn, headingOf, numbersIn } from '../cells';
 import { fill, h } from '../dom';
-import { button, choices, field, figures, textField } from '../form';
+import { button, choices, field, figures, formatOf, textField } from '../form';
 import { inputsOf } from '../inputsOf';
 import type { InputGroup } from '../inputsOf';
 import type { Step, StepContext } from '../Steps';
@@ -25,10 +25,11 @@ export function carryStep(context: StepContext): Step {
   const list = h('div', { class: 'inputs' });
   const what = choices([['UNC_CARRY', 'u alone'], ['UNC_REPORT', 'a report row: value, u, k, U, text …']], () => void place());
   const target = textField();
-  const outcome = h('p', { role: 'status' });
+  const outcome = h('p', { role: 'status', class: 'outcome' });
   let area: PortArea | undefined;
   let rows: Row[] = [];
   let again = false;
+  let format: string | undefined;
 
   async function follow(fromSelection: boolean): Promise<void> {
     const chosen = await host.selection();
@@ -52,7 +53,7 @@ export function carryStep(context: StepContext): Step {
     const state = h('span', { class: 'state' });
     const mark = (): void => {
       const exact = evidence.value.trim() === '';
-      state.textContent = exact ? 'taken as exact' : '';
+      state.textContent = exact ? 'taken as exact' : 'with evidence';
       element.classList.toggle('exact', exact);
     };
     const element = h('fieldset', {}, h('legend', {}, `${group.label} `, h('small', {}, addressOf(group.area))), state, field('Evidence (cells with u)', evidence), field('Where one row serves several cells', sharing),
@@ -109,6 +110,7 @@ export function carryStep(context: StepContext): Step {
     const given = rows.filter((r) => r.evidence.value.trim() !== '').map((r) => [r.group.area, areaOf(r.evidence.value, area!.sheet)] as const);
     if (given.some(([, e]) => e === undefined)) return fill(outcome);
     const cells = await callLibrary(host.port, 'UNC_CARRY', [area, ...given.flat()]);
+    format = formatOf(cells.map((line) => line[0]));
     const wrong = cells.flat().map(problemOf).find((p) => p !== undefined);
     fill(outcome, wrong ?? `u of the first result: ${figures(cells[0][0])}`);
   }
@@ -125,7 +127,7 @@ export function carryStep(context: StepContext): Step {
     const formula = `=ROOTSUM.${what.value}(${[addressOf(area, area.sheet), ...(report ? [''] : []), ...args].join(',')})`;
     const where = { sheet: area.sheet, row: area.row, col: at.col, rows: report ? area.rows * area.cols : area.rows, cols: report ? REPORT.length : area.cols };
     const headings = report ? REPORT : Array.from({ length: area.cols }, () => `u(${name || 'result'})`);
-    again = (await writeColumn(context, where, headings, formula, again)) === 'asked';
+    again = (await writeColumn(context, where, headings, formula, again, report ? undefined : format)) === 'asked';
   }
 
   const element = h('div', {},

@@ -48,8 +48,8 @@ export function checkStep({ host, say, written }: StepContext): Step {
   }
 
   const element = h('div', {},
-    h('h3', {}, 'Carried on this sheet'), exact, button('Look again', () => void showExact()),
-    h('h3', {}, 'Audit of this workbook'), audit, button('Audit now', () => void showAudit(), true),
-    h('h3', {}, 'Plan'), h('p', {}, 'What the pane has written, as a file that adds the same columns to other workbooks.'), button('Save the plan', savePlan));
+    h('h2', {}, 'Carried on this sheet'), exact, button('Look again', () => void showExact()),
+    h('h2', {}, 'Audit of this workbook'), audit, button('Audit now', () => void showAudit(), true),
+    h('h2', {}, 'Plan'), h('p', {}, 'What the pane has written, as a file that adds the same columns to other workbooks.'), button('Save the plan', savePlan));
   return { title: 'Check', element, shown: () => void showExact(), left: () => undefined };
 }

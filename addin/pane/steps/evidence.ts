@@ -4,7 +4,7 @@ import { callLibrary, problemOf } from '../callLibrary';
 import type { LibraryArgument } from '../callLibrary';
 import { freeColumn, headingOf, numbersIn } from '../cells';
 import { fill, h } from '../dom';
-import { button, choices, field, figures, table, textField } from '../form';
+import { button, choices, field, figures, formatOf, table, textField } from '../form';
 import type { Step, StepContext } from '../Steps';
 import { writeColumn } from '../writeColumn';
 
@@ -35,6 +35,7 @@ export function evidenceStep(context: StepContext): Step {
   let area: PortArea | undefined;
   let heading = '';
   let again = false;
+  let format: string | undefined;
 
   const arguments_ = (given: LibraryArgument): LibraryArgument[] => {
     switch (kind.value as Kind) {
@@ -72,6 +73,7 @@ export function evidenceStep(context: StepContext): Step {
     if (!area) return;
     const first = { ...area, rows: Math.min(5, area.rows) };
     const result = await callLibrary(host.port, names[chosen], arguments_(first));
+    format = formatOf(result.map((line) => line[0]));
     const given = await host.port.read([first]);
     fill(rows, table('First rows', [heading || 'Value', ...(full.checked ? ['u', 'degrees of freedom', 'shape'] : ['u'])], result.map((line, r) => [
       given[0].cells.slice(r * first.cols, (r + 1) * first.cols).map((c) => figures(c?.value)).join('  '), ...line.map((c) => problemOf(c) ?? figures(c)),
@@ -85,7 +87,7 @@ export function evidenceStep(context: StepContext): Step {
     const args = arguments_(area).map((arg) => (typeof arg === 'object' ? addressOf(arg, area!.sheet) : typeof arg === 'string' ? `"${arg}"` : arg === true ? 'TRUE' : (arg ?? '')));
     while (args.at(-1) === '') args.pop();
     const headings = full.checked ? [`u(${heading || 'value'})`, 'degrees of freedom', 'shape'] : [`u(${heading || 'value'})`];
-    const done = await writeColumn(context, { sheet: area.sheet, row: area.row, col: at.col, rows: area.rows, cols: headings.length }, headings, `=ROOTSUM.${names[kind.value as Kind]}(${args.join(',')})`, again);
+    const done = await writeColumn(context, { sheet: area.sheet, row: area.row, col: at.col, rows: area.rows, cols: headings.length }, headings, `=ROOTSUM.${names[kind.value as Kind]}(${args.join(',')})`, again, format);
     again = done === 'asked';
   }
 
