@@ -23,9 +23,16 @@ export function deskPaneHost(session: Session, grid: GridAccess, save: (name: st
     write: (edits) => session.edit(edits.map(({ sheet, row, col, value, formula, spill, numberFormat }) => ({
       sheet: working.sheetIndex(sheet)!, row, col, numberFormat,
       content: formula !== undefined ? { formula, spill } : { value: value! },
+      like: formula === undefined ? headingBeside(working, working.sheetIndex(sheet)!, row, col) : undefined,
     }))),
     undo: () => session.undo(),
     get undoable() { return session.undoable; },
     save,
   };
+}
+
+/** The nearest text to the left in the row, whose looks a new heading takes. */
+function headingBeside(working: Session['desk']['working'], sheet: number, row: number, col: number): { row: number; col: number } | undefined {
+  for (let at = col - 1; at >= Math.max(1, col - 12); at--) if (typeof working.stored(sheet, row, at)?.value === 'string') return { row, col: at };
+  return undefined;
 }

@@ -15,6 +15,8 @@ export interface CellEdit {
   readonly col: number;
   readonly content: { readonly formula: string; readonly spill?: { readonly rows: number; readonly cols: number } } | { readonly value: CellValue } | null;
   readonly numberFormat?: string;
+  /** A cell of the sheet whose style a constant takes. */
+  readonly like?: { readonly row: number; readonly col: number };
 }
 
 /** A cell that is part of an array formula, or another that may not be changed; the message names it. */
@@ -64,7 +66,9 @@ export class Session {
 
   /** What the formula bar shows: the formula as it is typed, or the constant. */
   textOf(sheet: number, row: number, col: number): string {
-    const cell = this.desk.working.cell(sheet, row, col);
+    const here = this.desk.working.cell(sheet, row, col);
+    // a cell of a spill shows the formula it comes from, as the sheet does
+    const cell = here?.partOf ? this.desk.working.cell(sheet, here.partOf.row, here.partOf.col) : here;
     if (!cell) return '';
     if (cell.hidden) return '';
     if (cell.formula !== undefined) return `=${typedFormula(cell.formula, this.desk.names)}`;
@@ -121,10 +125,10 @@ export class Session {
     }
   }
 
-  private apply({ sheet, row, col, content, numberFormat }: CellEdit, stored: string | undefined): void {
+  private apply({ sheet, row, col, content, numberFormat, like }: CellEdit, stored: string | undefined): void {
     const { working } = this.desk;
     if (content === null) working.setBlank(sheet, row, col);
-    else if ('value' in content) working.setConstant(sheet, row, col, content.value);
+    else if ('value' in content) working.setConstant(sheet, row, col, content.value, like && { like });
     else working.setFormula(sheet, row, col, stored!, this.isArray(stored!) || content.spill ? { spill: content.spill ?? { rows: 1, cols: 1 } } : {});
     if (numberFormat !== undefined) for (const key of styledCells({ sheet, row, col, content, numberFormat })) working.styles.set(key, { numberFormat });
   }
@@ -161,8 +165,8 @@ export class Session {
 }
 
 /** Cells whose number format an edit changes: those of the first column of a spill. */
-function styledCells({ sheet, row, col, content, numberFormat }: CellEdit): number[] {
-  if (numberFormat === undefined) return [];
+function styledCells({ sheet, row, col, content, numberFormat, like }: CellEdit): number[] {
+  if (numberFormat === undefined) return like ? [placeKey(sheet, row, col)] : [];
   const rows = content && 'formula' in content ? (content.spill?.rows ?? 1) : 1;
   return Array.from({ length: rows }, (_, r) => placeKey(sheet, row + r, col));
 }

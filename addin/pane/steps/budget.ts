@@ -48,7 +48,7 @@ export function budgetStep(context: StepContext): Step {
       h('h2', {}, addressOf(current!.result)),
       barPicture(sources.map((r) => ({ label: String(r[0]), share: r[share] as number }))),
       table('Budget', ['Source', 'Component', 'Share'], sources.map((r) => [String(r[0]), figures(r[component]), `${((r[share] as number) * 100).toFixed(1)} %`])),
-      h('dl', {}, ...rest.flatMap((r) => [h('dt', {}, String(r[0])), h('dd', {}, r.slice(1).filter((c) => c !== '').map((c) => problemOf(c) ?? figures(c, 5)).join('  '))])));
+      h('dl', {}, ...rest.flatMap((r) => [h('dt', {}, String(r[0])), h('dd', {}, typeof r[component] === 'number' ? figures(r[component], 5) : r.slice(1).filter((c) => c !== '').map((c) => problemOf(c) ?? figures(c, 5)).join('  '))])));
   }
 
   async function insert(): Promise<void> {

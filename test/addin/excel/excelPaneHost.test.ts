@@ -1,0 +1,44 @@
+import { beforeAll, describe, expect, it } from 'vitest';
+import { connect } from '../../../addin/excel/connect';
+import { excelPaneHost } from '../../../addin/excel/excelPaneHost';
+import { excelPort } from '../../../addin/excel/excelPort';
+import { fakeExcel } from './fakeExcel';
+
+beforeAll(() => {
+  Object.assign(globalThis, { Excel: { RangeValueType: { empty: 'Empty', error: 'Error' } } });
+});
+
+describe('Excel as the host of the pane', () => {
+  it('writes a step and takes it back, cell by cell', async () => {
+    const excel = fakeExcel({ sheets: { S: { cells: { A1: 'old', A2: { f: '=1+1', v: 2 } } } }, selected: "S!B2:C4" });
+    const host = excelPaneHost(excelPort(excel.run), '.', excel.run);
+    expect(await host.selection()).toEqual({ sheet: 'S', row: 2, col: 2, rows: 3, cols: 2 });
+    await host.write([{ sheet: 'S', row: 1, col: 1, value: 'u' }, { sheet: 'S', row: 2, col: 1, formula: '=ROOTSUM.STDU_FROM_TOL(B2:B3)', spill: { rows: 2, cols: 1 }, numberFormat: '0.00' }, { sheet: 'S', row: 5, col: 5, value: 7 }]);
+    expect(['A1', 'A2', 'E5'].map((c) => excel.text('S', c))).toEqual(['u', '=ROOTSUM.STDU_FROM_TOL(B2:B3)', 7]);
+    expect(host.undoable).toBe(1);
+    expect(await host.undo()).toBe(true);
+    expect(['A1', 'A2', 'E5'].map((c) => excel.text('S', c))).toEqual(['old', '=1+1', '']);
+    expect(await host.undo()).toBe(false);
+  });
+});
+
+describe('connect', () => {
+  const noPane = async () => { throw new Error('the pane must not be opened'); };
+
+  it('does nothing outside a host', async () => {
+    const around = {};
+    expect(await connect(around, noPane)).toBe(false);
+    expect(await connect({ Office: { onReady: async () => ({ host: null }) } }, noPane)).toBe(false);
+    expect(around).toEqual({});
+  });
+
+  it('gives the functions their port and the decimal separator, and opens the pane where the page has one', async () => {
+    const excel = fakeExcel({ sheets: { S: { cells: { A1: 1 } } }, decimalSeparator: ',' });
+    const around: Record<string, unknown> = { Office: { onReady: async () => ({ host: 'Excel' }) }, Excel: { run: excel.run }, document: { getElementById: (id: string) => ({ id }) } };
+    const opened: unknown[] = [];
+    expect(await connect(around, async () => ({ mountPane: (root, host) => opened.push([root, host.decimalSeparator]) }))).toBe(true);
+    expect(around.RootsumHost).toEqual({ decimalSeparator: ',' });
+    expect(await (around.RootsumPort as ReturnType<typeof excelPort>).sheets()).toEqual([{ name: 'S', rows: 1, cols: 1 }]);
+    expect(opened).toEqual([[{ id: 'pane' }, ',']]);
+  });
+});
