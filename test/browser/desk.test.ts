@@ -1,4 +1,4 @@
-import { mkdirSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -6,6 +6,13 @@ import { fileURLToPath } from 'node:url';
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { openBook } from '../../addin/desk/book/openBook';
+import { readPlan } from '../../addin/desk/command/readPlan';
+import { buildDemoBook } from '../../addin/desk/demo/buildDemoBook';
+import demoPlan from '../../addin/desk/demo/demoPlan.json';
+import { applyPlan } from '../../addin/desk/sheet/applyPlan';
+import { Desk as OpenDesk } from '../../addin/desk/sheet/Desk';
+import { buildBook } from '../desk/book/buildBook';
+import { builtFunctions } from '../desk/sheet/bundle';
 import { browserPath, openPage, startDesk } from './openPage';
 import type { Desk } from './openPage';
 
@@ -22,6 +29,10 @@ const tab = (page: Page, name: string) => page.getByRole('tab', { name, exact: t
 const step = (page: Page, name: string) => page.locator('.rootsum-pane').getByRole('tab', { name }).click();
 const line = (page: Page) => page.locator('.rootsum-pane .line');
 const paneText = (page: Page) => page.locator('.rootsum-pane .panel');
+
+/** A workbook of so many rows: two numbers and their sum. */
+const longBook = (rows: number): Uint8Array => buildBook({ sheets: [{ name: 'Long', xml: `<sheetData>${Array.from({ length: rows }, (_, i) =>
+  `<row r="${i + 1}"><c r="A${i + 1}"><v>${i + 1}</v></c><c r="B${i + 1}"><v>${2 * (i + 1)}</v></c><c r="C${i + 1}"><f>A${i + 1}+B${i + 1}</f><v>${3 * (i + 1)}</v></c></row>`).join('')}</sheetData>` }] });
 
 /** Clicks the first cell and, with shift, the last. */
 async function select(page: Page, from: [number, number], to = from): Promise<void> {
@@ -198,12 +209,36 @@ describe.runIf(browserPath)('the desk in a browser', () => {
   });
 
   it('walks through 50,000 rows by keys, drawing those in view alone', async () => {
-    const { page } = await openPage(small);
-    await page.evaluate(() => document.querySelector<HTMLElement>('td[data-row="1"]')!.focus());
-    await enter(page, [1, 12], 'end');
-    await page.locator('.scroller').evaluate((s) => { s.scrollTop = 300; });
-    await expect.poll(() => page.locator('td[data-col="1"]').count()).toBeLessThan(80);
+    const { page } = await openPage(demo);
+    await page.setInputFiles('#file', { name: 'long.xlsx', mimeType: 'application/octet-stream', buffer: Buffer.from(longBook(50_000)) });
+    await expect.poll(() => page.locator('.book').textContent(), { timeout: 20_000 }).toBe('long.xlsx');
+    await cell(page, 1, 1).click();
+    await page.keyboard.press('Control+End');
+    await expect.poll(() => cell(page, 50_000, 3).textContent()).toBe('150000');
+    expect(await page.locator('td[data-col="1"]').count()).toBeLessThan(80);
+    for (let i = 0; i < 20; i++) await page.keyboard.press('PageUp');
+    const row = await page.evaluate(() => Number((document.activeElement as HTMLElement).dataset.row));
+    expect(row).toBeLessThan(49_700);
+    expect(await page.getByLabel('Content of the cell').inputValue()).toMatch(/^=A\d+\+B\d+$/);
     await page.close();
+  });
+
+  it('shows the demo with its uncertainty columns, for the README', async () => {
+    const desk = new OpenDesk(openBook(buildDemoBook()), builtFunctions());
+    await applyPlan(desk, readPlan(JSON.stringify(demoPlan)));
+    writeFileSync(join(folder, 'demo-laboratory.xlsx'), desk.write());
+    const served = await startDesk(join(folder, 'demo-laboratory.xlsx'));
+    for (const colorScheme of ['light', 'dark'] as const) {
+      const { page } = await openPage(served, { colorScheme, viewport: { width: 1360, height: 760 } });
+      await tab(page, 'Hardness');
+      await step(page, '3 Budget');
+      await cell(page, 7, 9).click();
+      await expect.poll(() => paneText(page).locator('h2').textContent()).toBe('Hardness!I7');
+      expect(await paneText(page).locator('svg rect.bar').count()).toBe(9);
+      await page.screenshot({ path: join(pictures, `readme-${colorScheme}.png`) });
+      await page.close();
+    }
+    await served.close();
   });
 
   describe.each(['light', 'dark'] as const)('%s', (scheme) => {

@@ -10,7 +10,7 @@ const root = fileURLToPath(new URL('../..', import.meta.url));
 const SOURCES = ['addin', 'functions', 'manifest', 'reference', 'package.json', 'webpack.config.js'];
 
 /** What a build must leave behind. */
-const OUTPUTS = ['functions.js', 'functions.json', 'rootsum.cjs', 'desk.js', 'index.html', 'demo.xlsx', 'reference.html', 'manifest.xml'];
+const OUTPUTS = ['functions.js', 'functions.json', 'rootsum.cjs', 'desk.js', 'excel.js', 'index.html', 'demo.xlsx', 'reference.html', 'manifest.xml'];
 
 /** The folder that holds what is built. */
 export const distFolder = join(root, 'dist');

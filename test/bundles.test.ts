@@ -1,0 +1,16 @@
+import { readFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { gzipSync } from 'node:zlib';
+import { describe, expect, it } from 'vitest';
+import { distFolder } from './tools/buildIfStale.js';
+
+const size = (name: string): number => gzipSync(readFileSync(join(distFolder, name))).length;
+
+describe('what is loaded, packed', () => {
+  it('functions at start-up: at most 150 kB', () => expect(size('functions.js')).toBeLessThanOrEqual(150_000));
+  it('the add-in\'s own start: at most 30 kB, the pane comes when it is opened', () => {
+    expect(size('excel.js')).toBeLessThanOrEqual(30_000);
+    expect(readFileSync(join(distFolder, 'excel.js'), 'utf8')).not.toContain('Press again to write over');
+  });
+  it('the desk\'s page: at most 200 kB before the pane', () => expect(size('desk.js')).toBeLessThanOrEqual(200_000));
+});
