@@ -17,7 +17,13 @@ module.exports = {
     },
     {
       name: 'sheet-below-command', severity: 'error',
-      from: { path: '^addin/desk/sheet' }, to: { path: '^addin/desk/(?!book|sheet)' },
+      from: { path: '^addin/desk/sheet' }, to: { path: '^addin/(?!desk/(book|sheet)/)' },
+    },
+    { name: 'pane-knows-no-host', severity: 'error', from: { path: '^addin/pane' }, to: { path: '^addin/(?!pane)' } },
+    { name: 'excel-without-desk', severity: 'error', from: { path: '^addin/excel' }, to: { path: '^addin/desk' } },
+    {
+      name: 'pages-without-node', severity: 'error',
+      from: { path: '^addin/(pane|excel|desk/page)' }, to: { dependencyTypes: ['core'] },
     },
     { name: 'product-without-tests', severity: 'error', from: { path: '^(addin|functions)' }, to: { path: '^test' } },
     {

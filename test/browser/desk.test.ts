@@ -245,7 +245,7 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     it('every view passes the accessibility rules, at both widths', async () => {
       const { page } = await openPage(small, { colorScheme: scheme });
       await tab(page, 'Results');
-      for (const [name, width] of [['wide', 1440], ['narrow', 700]] as const) {
+      for (const [name, width] of [['wide', 1440], ['narrow', 700], ['least', 320]] as const) {
         await page.setViewportSize({ width, height: 900 });
         for (const title of ['1 Evidence', '2 Carry', '3 Budget', '4 Report', '5 Check']) {
           await step(page, title);

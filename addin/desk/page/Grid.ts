@@ -103,7 +103,7 @@ export class Grid {
       for (let row = 1; row <= Math.min(source.rows, 120); row++) {
         const { length } = source.text(row, i + 1);
         // a text with nothing to its right runs over, so it needs no room of its own
-        if (length > 0 && !(length > 12 && !source.isNumber(row, i + 1) && source.text(row, i + 2) === '')) widest = Math.max(widest, Math.min(230, length * (source.isBold(row, i + 1) ? 9.6 : 7.6) + 18));
+        if (length > 0 && !(length > 12 && !source.isNumber(row, i + 1) && source.text(row, i + 2) === '')) widest = Math.max(widest, Math.min(230, length * (source.isBold(row, i + 1) ? 9.6 : 8.4) + 18));
       }
       return Math.round(widest);
     });
