@@ -13,7 +13,7 @@ const schemaVersion = '1.25';
  *           of version 1.25.
  */
 export function jsonManifest(source: ManifestSource): object {
-  const { url, namespace, ribbon: { tab, group, pane } } = source;
+  const { url, namespace, ribbon: { tab, group, pane, commands } } = source;
   const requirements = { capabilities: source.requirementSets };
   const icons = ribbonIconSizes.map((size) => ({ size, url: url(files.icon(size)) }));
   return {
@@ -44,7 +44,7 @@ export function jsonManifest(source: ManifestSource): object {
             type: 'general',
             lifetime: 'long',
             code: { page: url(files.page), script: url(files.script) },
-            actions: [{ id: pane.controlId, type: 'openPage', view: pane.paneId }],
+            actions: [{ id: pane.controlId, type: 'openPage', view: pane.paneId }, ...commands.map(({ action }) => ({ id: action, type: 'executeFunction' }))],
             customFunctions: {
               namespace: { id: namespace, name: namespace },
               allowCustomDataForDataTypeAny: true,
@@ -72,6 +72,9 @@ export function jsonManifest(source: ManifestSource): object {
                         supertip: { title: pane.tipTitle, description: pane.tip },
                         actionId: pane.controlId,
                       },
+                      ...commands.map(({ controlId, action, label, tipTitle, tip }) => ({
+                        id: controlId, type: 'button', label, icons, supertip: { title: tipTitle, description: tip }, actionId: action,
+                      })),
                     ],
                   },
                 ],

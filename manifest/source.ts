@@ -43,8 +43,18 @@ export interface ManifestSource {
   readonly url: (file: string) => string;
 }
 
+/** A button that runs a function of the page, by the name under which the page associates it. */
+export interface RibbonCommand {
+  readonly controlId: string;
+  readonly action: string;
+  readonly label: string;
+  readonly tipTitle: string;
+  readonly tip: string;
+}
+
 /** A group of commands in a tab of Excel's own. */
 export interface Ribbon {
+  readonly commands: readonly RibbonCommand[];
   readonly tab: string;
   readonly group: { readonly id: string; readonly label: string };
   readonly pane: { readonly controlId: string; readonly paneId: string; readonly label: string; readonly tipTitle: string; readonly tip: string };
@@ -61,6 +71,8 @@ export const resourceIds = {
   paneTipTitle: 'Rootsum.Pane.TipTitle',
   paneTip: 'Rootsum.Pane.Tip',
   icon: (size: number) => `Rootsum.Icon.${size}`,
+  /** Of a command, by its place: label, title and text of its tip. */
+  command: (i: number, part: 'Label' | 'TipTitle' | 'Tip') => `Rootsum.Command${i}.${part}`,
 } as const;
 
 /**
@@ -93,6 +105,16 @@ export function manifestSource(host: string = defaultHost): ManifestSource {
     ribbon: {
       tab: 'TabFormulas',
       group: { id: 'Rootsum.Group', label: 'Rootsum' },
+      commands: [
+        {
+          controlId: 'Rootsum.TakeBack', action: 'rootsumTakeBack', label: 'Take back', tipTitle: 'Take back',
+          tip: 'Takes back what the pane wrote last, all cells of the step at once.',
+        },
+        {
+          controlId: 'Rootsum.Functions', action: 'rootsumReference', label: 'Functions', tipTitle: 'Reference of the functions',
+          tip: 'Opens the reference of all worksheet functions: purpose, arguments, example, formula, source and cautions.',
+        },
+      ],
       pane: {
         controlId: 'Rootsum.ShowPane',
         paneId: 'Rootsum.Pane',

@@ -70,7 +70,7 @@ const customFunctions = (): XmlElement =>
     reference('Namespace', resourceIds.namespace),
   ]);
 
-const commands = ({ ribbon: { tab, group, pane } }: ManifestSource): XmlElement =>
+const commands = ({ ribbon: { tab, group, pane, commands: others } }: ManifestSource): XmlElement =>
   element('ExtensionPoint', { 'xsi:type': 'PrimaryCommandSurface' }, [
     element('OfficeTab', { id: tab }, [
       element('Group', { id: group.id }, [
@@ -85,6 +85,12 @@ const commands = ({ ribbon: { tab, group, pane } }: ManifestSource): XmlElement 
             reference('SourceLocation', resourceIds.page),
           ]),
         ]),
+        ...others.map(({ controlId, action }, i) => element('Control', { 'xsi:type': 'Button', id: controlId }, [
+          reference('Label', resourceIds.command(i, 'Label')),
+          element('Supertip', {}, [reference('Title', resourceIds.command(i, 'TipTitle')), reference('Description', resourceIds.command(i, 'Tip'))]),
+          icon(),
+          element('Action', { 'xsi:type': 'ExecuteFunction' }, [element('FunctionName', {}, action)]),
+        ])),
       ]),
     ]),
   ]);
@@ -92,7 +98,7 @@ const commands = ({ ribbon: { tab, group, pane } }: ManifestSource): XmlElement 
 const icon = (): XmlElement =>
   element('Icon', {}, ribbonIconSizes.map((size) => element('bt:Image', { size: `${size}`, resid: resourceIds.icon(size) })));
 
-const resources = ({ url, namespace, ribbon: { group, pane } }: ManifestSource): XmlElement =>
+const resources = ({ url, namespace, ribbon: { group, pane, commands: others } }: ManifestSource): XmlElement =>
   element('Resources', {}, [
     element('bt:Images', {}, ribbonIconSizes.map((size) => resource('bt:Image', resourceIds.icon(size), url(files.icon(size))))),
     element('bt:Urls', {}, [
@@ -105,8 +111,12 @@ const resources = ({ url, namespace, ribbon: { group, pane } }: ManifestSource):
       resource('bt:String', resourceIds.groupLabel, group.label),
       resource('bt:String', resourceIds.paneLabel, pane.label),
       resource('bt:String', resourceIds.paneTipTitle, pane.tipTitle),
+      ...others.flatMap(({ label, tipTitle }, i) => [resource('bt:String', resourceIds.command(i, 'Label'), label), resource('bt:String', resourceIds.command(i, 'TipTitle'), tipTitle)]),
     ]),
-    element('bt:LongStrings', {}, [resource('bt:String', resourceIds.paneTip, pane.tip)]),
+    element('bt:LongStrings', {}, [
+      resource('bt:String', resourceIds.paneTip, pane.tip),
+      ...others.map(({ tip }, i) => resource('bt:String', resourceIds.command(i, 'Tip'), tip)),
+    ]),
   ]);
 
 const value = (name: string, text: string): XmlElement => element(name, { DefaultValue: text });

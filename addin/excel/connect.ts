@@ -6,7 +6,8 @@ import type { Run } from './excelPort';
 
 /** Names that the functions bundle looks up at each call, and what the host may have put there. */
 interface Surroundings {
-  Office?: { onReady(): Promise<{ host: unknown }> };
+  Office?: { onReady(): Promise<{ host: unknown }>; actions?: { associate(id: string, action: (event: { completed(): void }) => void): void } };
+  open?: (address: string, target: string) => unknown;
   Excel?: { run: Run };
   document?: { getElementById(id: string): unknown };
   RootsumPort?: unknown;
@@ -29,10 +30,18 @@ export async function connect(around: object, openPane: () => Promise<{ mountPan
   const decimalSeparator = await separator(run);
   surroundings.RootsumPort = port;
   surroundings.RootsumHost = { decimalSeparator };
+  const paneHost = excelPaneHost(port, decimalSeparator, run);
+  const { actions } = surroundings.Office;
+  // The names stand in the manifest, with the buttons of the ribbon.
+  actions?.associate('rootsumTakeBack', (event) => void paneHost.undo().finally(() => event.completed()));
+  actions?.associate('rootsumReference', (event) => {
+    surroundings.open?.('reference.html', '_blank');
+    event.completed();
+  });
   const root = surroundings.document?.getElementById('pane');
   if (root) {
     const { mountPane } = await openPane();
-    mountPane(root as HTMLElement, excelPaneHost(port, decimalSeparator, run));
+    mountPane(root as HTMLElement, paneHost);
   }
   return true;
 }

@@ -123,6 +123,11 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     expect(u).toBeCloseTo((factor * 1.5 * tolerance) / Math.sqrt(3), 12);
     expect(book.cell(0, 3, 7)?.value).toBe('u(Result)');
     expect(book.cell(0, 4, 7)).toMatchObject({ formula: '_xldudf_ROOTSUM_UNC_CARRY(E4:E15,B4:B15,F4:F15)', array: { dynamic: true } });
+    // the plan that the pane saved gives the same bits without a browser
+    const again = new OpenDesk(openBook(readFileSync(new URL('../corpus/features/openpyxl.xlsx', import.meta.url))), builtFunctions());
+    const outcome = await applyPlan(again, readPlan(readFileSync(join(folder, 'plan.json'), 'utf8')));
+    expect(outcome.entries.map((e) => e.state)).toEqual(['added', 'added', 'added', 'added']);
+    for (let row = 3; row <= 15; row++) for (let col = 5; col <= 10; col++) expect(again.working.cell(0, row, col)?.value).toEqual(book.cell(0, row, col)?.value);
     expect(complaints).toEqual([]);
     await page.close();
   });

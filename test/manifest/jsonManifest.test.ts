@@ -114,7 +114,9 @@ describe('the unified manifest', () => {
     expect(runtime.code.script).toBe(resource(only(only(xml, 'Script'), 'SourceLocation').attributes.resid));
     expect(runtime.lifetime).toBe(only(xml, 'Runtime').attributes.lifetime);
     expect(group.label).toBe(resource(only(xml, 'Group').children[0].attributes.resid));
-    expect(group.controls[0].label).toBe(resource(only(xml, 'Control').children[0].attributes.resid));
+    const controls = everyNode(xml).filter(({ name }) => name === 'Control');
+    expect(group.controls.map(({ label }) => label)).toEqual(controls.map(({ children }) => resource(children[0].attributes.resid)));
+    expect(group.controls.length).toBe(3);
   });
   test('puts the functions into the shared runtime, by the address of their metadata', () => {
     // "Configure custom functions with the unified manifest for Microsoft 365".
@@ -126,7 +128,8 @@ describe('the unified manifest', () => {
   });
   test('has an action for every control, and opens the pane in the same runtime', () => {
     for (const { actionId } of group.controls) expect(runtime.actions.map(({ id }) => id)).toContain(actionId);
-    expect(runtime.actions).toEqual([{ id: group.controls[0].actionId, type: 'openPage', view: only(xml, 'TaskpaneId').text }]);
+    const functions = everyNode(xml).filter(({ name }) => name === 'FunctionName').map(({ text }) => ({ id: text, type: 'executeFunction' }));
+    expect(runtime.actions).toEqual([{ id: group.controls[0].actionId, type: 'openPage', view: only(xml, 'TaskpaneId').text }, ...functions]);
   });
   test('names icons that are written', () => {
     const written = [...manifestFiles().keys()];

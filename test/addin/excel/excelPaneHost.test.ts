@@ -2,6 +2,7 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { connect } from '../../../addin/excel/connect';
 import { excelPaneHost } from '../../../addin/excel/excelPaneHost';
 import { excelPort } from '../../../addin/excel/excelPort';
+import { manifestSource } from '../../../manifest/source';
 import { fakeExcel } from './fakeExcel';
 
 beforeAll(() => {
@@ -34,11 +35,18 @@ describe('connect', () => {
 
   it('gives the functions their port and the decimal separator, and opens the pane where the page has one', async () => {
     const excel = fakeExcel({ sheets: { S: { cells: { A1: 1 } } }, decimalSeparator: ',' });
-    const around: Record<string, unknown> = { Office: { onReady: async () => ({ host: 'Excel' }) }, Excel: { run: excel.run }, document: { getElementById: (id: string) => ({ id }) } };
     const opened: unknown[] = [];
+    const actions = new Map<string, (event: { completed(): void }) => void>();
+    const around: Record<string, unknown> = { Office: { onReady: async () => ({ host: 'Excel' }), actions: { associate: (id: string, action: () => void) => actions.set(id, action) } }, open: (page: string) => opened.push(page), Excel: { run: excel.run }, document: { getElementById: (id: string) => ({ id }) } };
     expect(await connect(around, async () => ({ mountPane: (root, host) => opened.push([root, host.decimalSeparator]) }))).toBe(true);
     expect(around.RootsumHost).toEqual({ decimalSeparator: ',' });
     expect(await (around.RootsumPort as ReturnType<typeof excelPort>).sheets()).toEqual([{ name: 'S', rows: 1, cols: 1 }]);
     expect(opened).toEqual([[{ id: 'pane' }, ',']]);
+    // the buttons of the ribbon, by the names in the manifest
+    expect([...actions.keys()].sort()).toEqual(manifestSource().ribbon.commands.map((c) => c.action).sort());
+    let done = 0;
+    actions.get('rootsumReference')!({ completed: () => done++ });
+    expect([opened.at(-1), done]).toEqual(['reference.html', 1]);
+    await new Promise<void>((completed) => actions.get('rootsumTakeBack')!({ completed }));
   });
 });
