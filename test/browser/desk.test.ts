@@ -221,6 +221,10 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     await page.keyboard.press('Control+End');
     await expect.poll(() => cell(page, 50_000, 3).textContent()).toBe('150000');
     expect(await page.locator('td[data-col="1"]').count()).toBeLessThan(80);
+    // the headings of rows and columns stay where they are
+    const scroller = (await page.locator('.scroller').boundingBox())!;
+    const corner = (await page.locator('th.corner').boundingBox())!;
+    expect([Math.round(corner.x - scroller.x), Math.round(corner.y - scroller.y)]).toEqual([0, 0]);
     for (let i = 0; i < 20; i++) await page.keyboard.press('PageUp');
     const row = await page.evaluate(() => Number((document.activeElement as HTMLElement).dataset.row));
     expect(row).toBeLessThan(49_700);

@@ -129,7 +129,9 @@ export class Grid {
     const lastRow = Math.min(this.rowCount, top + count);
     this.table.setAttribute('aria-rowcount', String(this.rowCount + 1));
     this.table.setAttribute('aria-colcount', String(this.colCount + 1));
-    this.table.style.transform = `translate(${from === 0 ? 0 : this.lefts[from] - HEAD_WIDTH}px, ${top * ROW_HEIGHT}px)`;
+    // by its place, not by a transform: headings that stick reckon without transforms
+    this.table.style.left = `${from === 0 ? 0 : this.lefts[from] - HEAD_WIDTH}px`;
+    this.table.style.top = `${top * ROW_HEIGHT}px`;
     const columns = Array.from({ length: to - from }, (_, i) => from + i);
     const head = h('tr', { role: 'row', 'aria-rowindex': 1 }, h('th', { role: 'columnheader', class: 'corner', 'aria-colindex': 1 }, h('span', { class: 'unseen' }, 'Row')),
       ...columns.map((c) => h('th', { role: 'columnheader', scope: 'col', 'aria-colindex': c + 2 }, toCol(c))));
