@@ -24,13 +24,14 @@ export const refusal = (message: string): CellError => new CellError('#VALUE!', 
 
 /**
  * Whatever was thrown, as a cell. The engine's refusals become #VALUE! with their words, the engine function's name dropped: the
- * user knows the worksheet function only. Anything else is a bug of this library and says so.
+ * user knows the worksheet function only. So do those of the workbook's port. Anything else is a bug of this library and says so.
  *
  * @param where   Appended to the engine's words: ` in row 3`.
  */
 export function toCellError(thrown: unknown, where = ''): CellError {
   if (thrown instanceof CellError) return thrown;
   if (thrown instanceof EngineError) return refusal(withoutFunctionName(thrown.message) + where);
+  if (thrown instanceof Error && thrown.name === 'PortRefusal') return refusal(thrown.message + where);
   const words = thrown instanceof Error ? `${thrown.name}: ${thrown.message}` : String(thrown);
   return refusal(`fault in the library (${words})${where}`);
 }

@@ -75,3 +75,11 @@ export interface PortCell {
   /** True where the formula may be hidden from the reader (a protected sheet). */
   readonly hidden?: boolean;
 }
+
+/**
+ * What a port throws where it cannot read what it is asked for: the words stand in the cell. Known by its name, for a port may come from
+ * another bundle.
+ */
+export class PortRefusal extends Error {
+  override name = 'PortRefusal';
+}

@@ -1,6 +1,7 @@
 /// <reference types="office-js" />
 import { translateFormulaToR1C1 } from '@borgar/fx';
 import { parseAddress } from '../../functions/address';
+import { PortRefusal } from '../../functions/workbook';
 import type { PortArea, PortCell, PortHiddenRow, PortName, PortSheet, PortTable, PortTile, WorkbookPort } from '../../functions/workbook';
 
 /** Runs a batch against the workbook: `Excel.run`, or a test's own. */
@@ -18,7 +19,7 @@ export interface ExcelPort extends WorkbookPort {
  * The workbook behind Office.js, for reading. One call is one batch with two or three round trips, however many cells it asks for. Calls
  * in one turn of the event loop see one revision; a later turn never trusts what was read before, for a change may not have been told.
  *
- * @throws Error with words where the host refuses, or an area is too large to be read.
+ * @throws PortRefusal where an area is too large to be read; what the host throws goes through.
  */
 export function excelPort(run: Run = Excel.run): ExcelPort {
   let revision = 0;
@@ -141,7 +142,7 @@ async function readHiddenRows(context: Excel.RequestContext, name: string): Prom
 
 async function readTiles(context: Excel.RequestContext, areas: readonly PortArea[]): Promise<PortTile[]> {
   const cells = areas.reduce((n, a) => n + a.rows * a.cols, 0);
-  if (cells > MOST_CELLS) throw new Error(`${cells} cells would have to be read at once, more than ${MOST_CELLS}: refer to smaller ranges`);
+  if (cells > MOST_CELLS) throw new PortRefusal(`${cells} cells would have to be read at once, more than ${MOST_CELLS}: refer to smaller ranges`);
   const parts = areas.map((area) => {
     const sheet = context.workbook.worksheets.getItem(area.sheet);
     const range = sheet.getRangeByIndexes(area.row - 1, area.col - 1, area.rows, area.cols);
@@ -152,8 +153,15 @@ async function readTiles(context: Excel.RequestContext, areas: readonly PortArea
     return { area, sheet, range, protection };
   });
   await context.sync();
-  // Which cells belong to a spill is asked only where a tile has one: false is surely none, null is some.
-  const spills = parts.map(({ range, area }) => (range.hasSpill === false ? undefined : askSpills(range, area)));
+  // Which cells belong to a spill is asked only where a tile has one (false is surely none, null is some), and there only in the columns
+  // that have one: every cell that is asked costs two objects.
+  const columns = parts.map(({ range, area }) => (range.hasSpill === false ? [] : Array.from({ length: area.cols }, (_, c) => {
+    const column = range.getColumn(c);
+    column.load('hasSpill');
+    return column;
+  })));
+  if (columns.some((list) => list.length > 0)) await context.sync();
+  const spills = parts.map(({ range, area }, i) => (columns[i].length === 0 ? undefined : askSpills(range, area, columns[i].map((column) => column.hasSpill !== false))));
   // Whether a formula is hidden is asked cell by cell only where a protected sheet has both kinds.
   const hidden = parts.map(({ sheet, protection, range, area }) =>
     (sheet.protection.protected && protection.formulaHidden === null ? range.getCellProperties({ format: { protection: true } }) : undefined) ?? area.rows);
@@ -164,12 +172,12 @@ async function readTiles(context: Excel.RequestContext, areas: readonly PortArea
 type Part = { readonly area: PortArea; readonly sheet: Excel.Worksheet; readonly range: Excel.Range; readonly protection: Excel.FormatProtection };
 type Spill = { readonly row: number; readonly col: number; readonly to: Excel.Range; readonly parent: Excel.Range };
 
-/** Asks for the spill of every cell that is a formula or shows something; one round trip serves them all. */
-function askSpills(range: Excel.Range, { rows, cols }: PortArea): Spill[] {
+/** Asks for the spill of every cell of some columns that is a formula or shows something; one round trip serves them all. */
+function askSpills(range: Excel.Range, { rows, cols }: PortArea, inColumn: readonly boolean[]): Spill[] {
   const asked: Spill[] = [];
   for (let r = 0; r < rows; r++) {
     for (let c = 0; c < cols; c++) {
-      if (range.valueTypes[r][c] === Excel.RangeValueType.empty) continue;
+      if (!inColumn[c] || range.valueTypes[r][c] === Excel.RangeValueType.empty) continue;
       const cell = range.getCell(r, c);
       const to = cell.getSpillingToRangeOrNullObject();
       const parent = cell.getSpillParentOrNullObject();

@@ -3,6 +3,8 @@ import { connect } from '../../../addin/excel/connect';
 import { excelPaneHost } from '../../../addin/excel/excelPaneHost';
 import { excelPort } from '../../../addin/excel/excelPort';
 import { manifestSource } from '../../../manifest/source';
+import type { PortArea } from '../../../functions/workbook';
+import { callOn } from '../../functions/carry/callOn';
 import { fakeExcel } from './fakeExcel';
 
 beforeAll(() => {
@@ -23,13 +25,40 @@ describe('Excel as the host of the pane', () => {
   });
 });
 
+const noPane = async () => { throw new Error('the pane must not be opened'); };
+
+/** The port, with one cell to hand over as an argument. */
+const withCells = (port: ReturnType<typeof excelPort>) => ({ ...port, read: async (areas: readonly PortArea[]) => (areas[0].rows * areas[0].cols === 1 ? [{ area: areas[0], cells: [{ value: 1 }] }] : port.read(areas)) });
+
 describe('connect', () => {
-  const noPane = async () => { throw new Error('the pane must not be opened'); };
+  it('outside of Excel, or in one that is too old, every reading says so', async () => {
+    const none = { Office: { onReady: async () => ({ host: null }) }, RootsumPort: undefined as never as ReturnType<typeof excelPort> };
+    const old = {
+      Office: { onReady: async () => ({ host: 'Excel' }), context: { requirements: { isSetSupported: () => false } } },
+      Excel: { run: () => { throw new Error('must not be asked'); } }, RootsumPort: undefined as never as ReturnType<typeof excelPort>,
+    };
+    for (const around of [none, old]) {
+      expect(await connect(around, noPane)).toBe(false);
+      await expect(around.RootsumPort.sheets()).rejects.toThrow('needs an Excel that tells of spills');
+      expect(await callOn(withCells(around.RootsumPort), 'UNC_CARRY', ['S!A1'], ['S!A1', { literal: 0.1 }])).toEqual([['#VALUE! UNC_CARRY: needs an Excel that tells of spills and of rows that do not show (ExcelApi 1.12)']]);
+    }
+  });
+
+  it('has a port at once, whose answers wait until Excel is ready', async () => {
+    const excel = fakeExcel({ sheets: { S: { cells: { A1: 1 } } } });
+    let ready = (_: { host: string }): void => undefined;
+    const around = { Office: { onReady: () => new Promise<{ host: string }>((r) => { ready = r; }) }, Excel: undefined as unknown, RootsumPort: undefined as never as ReturnType<typeof excelPort> };
+    const connecting = connect(around, noPane);
+    const asked = around.RootsumPort.sheets();
+    around.Excel = { run: (_options: object, batch: Parameters<typeof excel.run>[0]) => excel.run(batch) };
+    ready({ host: 'Excel' });
+    expect(await asked).toEqual([{ name: 'S', rows: 1, cols: 1 }]);
+    expect(await connecting).toBe(true);
+  });
 
   it('does nothing outside a host', async () => {
     const around = {};
     expect(await connect(around, noPane)).toBe(false);
-    expect(await connect({ Office: { onReady: async () => ({ host: null }) } }, noPane)).toBe(false);
     expect(around).toEqual({});
   });
 
@@ -37,7 +66,7 @@ describe('connect', () => {
     const excel = fakeExcel({ sheets: { S: { cells: { A1: 1 } } }, decimalSeparator: ',' });
     const opened: unknown[] = [];
     const actions = new Map<string, (event: { completed(): void }) => void>();
-    const around: Record<string, unknown> = { Office: { onReady: async () => ({ host: 'Excel' }), actions: { associate: (id: string, action: () => void) => actions.set(id, action) } }, open: (page: string) => opened.push(page), Excel: { run: excel.run }, document: { getElementById: (id: string) => ({ id }) } };
+    const around: Record<string, unknown> = { Office: { onReady: async () => ({ host: 'Excel' }), actions: { associate: (id: string, action: () => void) => actions.set(id, action) } }, open: (page: string) => opened.push(page), Excel: { run: (_options: object, batch: Parameters<typeof excel.run>[0]) => excel.run(batch) }, document: { getElementById: (id: string) => ({ id }) } };
     expect(await connect(around, async () => ({ mountPane: (root, host) => opened.push([root, host.decimalSeparator]) }))).toBe(true);
     expect(around.RootsumHost).toEqual({ decimalSeparator: ',' });
     expect(await (around.RootsumPort as ReturnType<typeof excelPort>).sheets()).toEqual([{ name: 'S', rows: 1, cols: 1 }]);

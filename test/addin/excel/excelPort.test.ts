@@ -63,7 +63,10 @@ describe('the port over Office.js', () => {
     expect([large.count, small.count]).toEqual([{ syncs: 1, runs: 1 }, { syncs: 1, runs: 1 }]);
     const spilled = fakeExcel(book);
     await excelPort(spilled.run).read([area(1, 1, 3, 9)]);
-    expect(spilled.count.syncs).toBe(2);
+    expect(spilled.count.syncs).toBe(3);
+    const longSpill = fakeExcel({ sheets: { S: { cells: Object.fromEntries(Array.from({ length: 200 }, (_, i) => [`A${i + 1}`, { f: '=SEQUENCE(200)', v: i + 1 }])), spills: { A1: [200, 1] } } } });
+    await excelPort(longSpill.run).read([{ sheet: 'S', row: 1, col: 1, rows: 200, cols: 5 }]);
+    expect(longSpill.count.syncs).toBe(3);
   });
 
   it('refuses to read what is too large, in words', () =>

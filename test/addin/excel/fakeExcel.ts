@@ -138,6 +138,7 @@ function sheetOf(name: string, sheet: FakeSheet, queue: Queue, formats: Map<stri
       hasSpill: () => (some.every((s) => s) ? true : some.some((s) => s) ? null : false),
       numberFormat: () => grid((r, c) => formats.get(`${name}!${nameOf(r, c)}`) ?? 'General'), address: () => `${name}!${nameOf(row, col)}`,
     }, {
+      getColumn: (c: number) => range(row, col + c, rows, 1),
       getCell: (r: number, c: number) => range(row + r, col + c, 1, 1),
       getSpillingToRangeOrNullObject: () => {
         const spill = spillOf(row, col);
