@@ -95,6 +95,13 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     await cell(page, 6, 7).click();
     await expect.poll(() => paneText(page).locator('h2').textContent()).toBe('Results!E6');
     await page.screenshot({ path: join(pictures, 'budget.png') });
+    await page.getByRole('button', { name: 'Insert into the sheet' }).click();
+    await expect.poll(() => line(page).textContent()).toMatch(/^Uncertainty budget of Results!E6 written into Results!I5:T\d+$/);
+    expect(await cell(page, 5, 9).textContent()).toBe('Source');
+    expect(await cell(page, 6, 9).textContent()).toBe('Volume');
+    await page.locator('.rootsum-pane').getByRole('button', { name: 'Undo' }).click();
+    await expect.poll(() => cell(page, 5, 9).textContent()).toBe('');
+    await cell(page, 6, 7).click();
     // report
     await step(page, '4 Report');
     await page.getByLabel('Unit').fill('mg/L');
@@ -179,6 +186,24 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     await cell(page, 8, 9).focus();
     await page.keyboard.press('Control+z');
     await expect.poll(() => cell(page, 8, 9).textContent()).toBe('');
+    await page.close();
+  });
+
+  it('the pane is used by keys alone, and keeps its borders in high contrast', async () => {
+    const { page } = await openPage(small, { forcedColors: 'active' });
+    await page.locator('.rootsum-pane').getByRole('tab', { name: '1 Evidence' }).focus();
+    for (const title of ['2 Carry', '3 Budget', '4 Report', '5 Check', '1 Evidence']) {
+      await page.keyboard.press('ArrowRight');
+      expect(await page.evaluate(() => document.activeElement?.textContent)).toBe(title);
+      expect(await page.locator('.rootsum-pane .panel').getAttribute('aria-labelledby')).toBe(await page.evaluate(() => document.activeElement!.id));
+    }
+    const reached = new Set<string>();
+    for (let i = 0; i < 14; i++) {
+      await page.keyboard.press('Tab');
+      reached.add(await page.evaluate(() => (document.activeElement as HTMLInputElement).labels?.[0]?.textContent ?? document.activeElement?.textContent ?? ''));
+    }
+    for (const name of ['Read the selection', 'Cells', 'They are', 'Shape', 'Heading goes to', 'Write the column', 'Undo']) expect([...reached]).toContain(name);
+    await page.screenshot({ path: join(pictures, 'contrast.png') });
     await page.close();
   });
 
