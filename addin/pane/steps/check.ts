@@ -24,7 +24,7 @@ export function checkStep({ host, say, written }: StepContext): Step {
       const counts = row?.map((r) => (typeof r[7] === 'number' ? r[7] : 0)) ?? [];
       const problem = row?.flat().map(problemOf).find((p) => p !== undefined);
       items.push(h('li', {}, h('button', { type: 'button', class: 'link', onclick: () => void host.show(call.at) }, `${call.name} in ${addressOf({ ...call.at, rows: 1, cols: 1 })}`),
-        ` for ${addressOf(call.results)}: ${Math.max(0, ...counts)} numbers taken as exact at most`, ...(wrong > 0 ? [`; ${wrong} results refused`] : []), ...(problem === undefined ? [] : [h('div', { class: 'wrong' }, problem)])));
+        ` for ${addressOf(call.results)}: ${Math.max(0, ...counts) === 0 ? 'no cell' : `at most ${Math.max(...counts)} cells`} taken as exact`, ...(wrong > 0 ? [`; ${wrong} results refused`] : []), ...(problem === undefined ? [] : [h('div', { class: 'wrong' }, problem)])));
     }
     fill(exact, items.length > 0 ? h('ul', {}, ...items) : h('p', {}, 'No uncertainty has been carried on this sheet yet'));
   }
