@@ -120,9 +120,9 @@ function tableThatGrows(working: Desk['working'], { sheet, headerRow, left, firs
 /** A formula without relative addresses is what a table may offer to rows that are added later. */
 const isSameEverywhere = (formula: string, row: number, col: number): boolean => sharedFormula(formula, row, col)(row + 1, col) === formula;
 
-/** The style of the nearest heading to the left, be there a spacer column between. */
+/** The style of the nearest heading to the left: of the table beside which the column stands, columns of this plan between them or not. */
 function headingBeside(working: Desk['working'], { sheet, headerRow, left }: PlanTarget): { like: { row: number; col: number } } | undefined {
-  for (let col = left - 1; col >= Math.max(1, left - 3); col--) {
+  for (let col = left - 1; col >= Math.max(1, left - 16); col--) {
     if (typeof working.stored(sheet, headerRow, col)?.value === 'string') return { like: { row: headerRow, col } };
   }
   return undefined;
