@@ -238,6 +238,21 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     await page.close();
   });
 
+  it('does not drop changes that are not saved without saying so', async () => {
+    const { page } = await openPage(small);
+    await tab(page, 'Results');
+    await enter(page, [4, 2], '20');
+    await expect.poll(() => page.locator('.status').textContent()).toBe('');
+    const other = fileURLToPath(new URL('../corpus/books/loan-xlsxwriter.xlsx', import.meta.url));
+    await page.setInputFiles('#file', other);
+    await expect.poll(() => page.locator('.status').textContent()).toBe('openpyxl.xlsx has changes that are not saved: save it first, or open loan-xlsxwriter.xlsx once more to leave them');
+    await Promise.all([page.waitForEvent('download'), page.getByRole('button', { name: 'Save', exact: true }).click()]);
+    await page.setInputFiles('#file', other);
+    await expect.poll(() => page.locator('.book').textContent()).toBe('loan-xlsxwriter.xlsx');
+    expect(await page.title()).toBe('loan-xlsxwriter.xlsx · Rootsum desk');
+    await page.close();
+  });
+
   it('walks through 50,000 rows by keys, drawing those in view alone', async () => {
     const { page } = await openPage(demo);
     await page.setInputFiles('#file', { name: 'long.xlsx', mimeType: 'application/octet-stream', buffer: Buffer.from(longBook(50_000)) });

@@ -22,6 +22,9 @@ class Page {
   private session: Session | undefined;
   private sheet = 0;
   private name = 'book.xlsx';
+  /** How many steps were saved, and the name of a file that would replace unsaved ones if it is opened once more. */
+  private savedSteps = 0;
+  private warnedOf: string | undefined;
   private closePane: (() => void) | undefined;
   private readonly moved = new Set<() => void>();
   private readonly status = h('div', { class: 'status', role: 'status', 'aria-live': 'polite' });
@@ -41,7 +44,14 @@ class Page {
       done: (text, move) => void this.typed(text, move),
       cancelled: () => { this.selected(); this.grid.focus(); },
     });
-    const file = h('input', { type: 'file', accept: '.xlsx,.xlsm', id: 'file', class: 'unseen', onchange: () => { const [chosen] = file.files ?? []; if (chosen) void this.openFile(chosen); } });
+    const file = h('input', {
+      type: 'file', accept: '.xlsx,.xlsm', id: 'file', class: 'unseen',
+      onchange: () => {
+        const [chosen] = file.files ?? [];
+        file.value = ''; // so that the same file can be chosen again
+        if (chosen) void this.openFile(chosen);
+      },
+    });
     const button = (label: string, press: () => void, keys = ''): HTMLElement => h('button', { type: 'button', onclick: press, title: keys || undefined }, label);
     document.body.append(
       h('header', { class: 'top' }, h('h1', {}, 'Rootsum desk'), this.title,
@@ -57,11 +67,20 @@ class Page {
       const [dropped] = event.dataTransfer?.files ?? [];
       if (dropped) void this.openFile(dropped);
     });
+    window.addEventListener('beforeunload', (event) => { if (this.isUnsaved) event.preventDefault(); });
     document.addEventListener('copy', (event) => this.copy(event));
     document.addEventListener('paste', (event) => this.paste(event));
   }
 
+  private get isUnsaved(): boolean {
+    return this.session !== undefined && this.session.undoable !== this.savedSteps;
+  }
+
   async openFile(file: File): Promise<void> {
+    if (this.isUnsaved && this.warnedOf !== file.name) {
+      this.warnedOf = file.name;
+      return this.say(`${this.name} has changes that are not saved: save it first, or open ${file.name} once more to leave them`, true);
+    }
     await this.open(file.name, () => file.arrayBuffer());
   }
 
@@ -73,7 +92,10 @@ class Page {
       const book = openBook(new Uint8Array(await bytes()));
       const session = await Session.open(book, this.bundle, (done, of) => this.say(`Computing ${name}: ${done} of ${of} cells`));
       this.session = session;
+      this.savedSteps = 0;
+      this.warnedOf = undefined;
       this.name = name;
+      document.title = `${name} · Rootsum desk`;
       this.title.textContent = name;
       this.sheet = Math.max(0, book.sheets.findIndex((s) => s.kind === 'worksheet' && s.state === 'visible'));
       session.onChange(() => this.changed());
@@ -83,8 +105,9 @@ class Page {
       this.say(`${name}: ${book.sheets.length} sheets`);
       await this.openPane(session);
     } catch (problem) {
-      if (!(problem instanceof BookError)) throw problem;
-      this.say(`${name} was not opened: ${problem.message}`, true);
+      const known = problem instanceof BookError;
+      this.say(`${name} was not opened: ${known ? problem.message : `fault in the library (${String(problem)})`}`, true);
+      if (!known) throw problem;
     }
   }
 
@@ -248,6 +271,7 @@ class Page {
       const bytes = await this.session.write(values);
       const name = this.name.replace(/(\.xls[xm])$/i, values ? '-values$1' : '-rootsum$1');
       downloadBytes(name, bytes);
+      if (!values) this.savedSteps = this.session.undoable;
       this.say(`${name} was saved with everything else in the file as it was`);
     } catch (problem) {
       if (!(problem instanceof BookError)) throw problem;
