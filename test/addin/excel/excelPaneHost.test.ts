@@ -1,4 +1,4 @@
-import { beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { connect } from '../../../addin/excel/connect';
 import { excelPaneHost } from '../../../addin/excel/excelPaneHost';
 import { excelPort } from '../../../addin/excel/excelPort';
@@ -6,10 +6,7 @@ import { manifestSource } from '../../../manifest/source';
 import type { PortArea } from '../../../functions/workbook';
 import { callOn } from '../../functions/carry/callOn';
 import { fakeExcel } from './fakeExcel';
-
-beforeAll(() => {
-  Object.assign(globalThis, { Excel: { RangeValueType: { empty: 'Empty', error: 'Error' } } });
-});
+import type { FakeCell } from './fakeExcel';
 
 describe('Excel as the host of the pane', () => {
   it('writes a step and takes it back, cell by cell', async () => {
@@ -22,6 +19,74 @@ describe('Excel as the host of the pane', () => {
     expect(await host.undo()).toBe(true);
     expect(['A1', 'A2', 'E5'].map((c) => excel.text('S', c))).toEqual(['old', '=1+1', '']);
     expect(await host.undo()).toBe(false);
+  });
+
+  it('takes back what reads like something else: texts that begin with = or look like numbers, cells for texts', async () => {
+    const before = { A1: '=A9', A2: '0012', A3: '1-2', A4: { f: '=1+1', v: 2 }, A5: true, A6: 3.5 } as const;
+    const excel = fakeExcel({ sheets: { S: { cells: { ...before }, formats: { A2: '@', A6: '0.00' } } } });
+    const host = excelPaneHost(excelPort(excel.run), '.', excel.run);
+    const cells = Object.keys(before);
+    const all = () => cells.map((c) => [excel.text('S', c), excel.format('S', c)]);
+    const first = all();
+    await host.write(cells.map((_, i) => ({ sheet: 'S', row: i + 1, col: 1, value: i, numberFormat: '0.0' })));
+    expect(all()).toEqual(cells.map((_, i) => [i, '0.0']));
+    await host.undo();
+    expect(all()).toEqual(first);
+  });
+
+  it('writes a heading as a text, whatever it looks like', async () => {
+    const excel = fakeExcel({ sheets: { S: { cells: {} } } });
+    const host = excelPaneHost(excelPort(excel.run), '.', excel.run);
+    await host.write(['1-2', '=x', 'u(A)'].map((value, i) => ({ sheet: 'S', row: i + 1, col: 1, value })));
+    expect(['A1', 'A2', 'A3'].map((c) => excel.text('S', c))).toEqual(['1-2', '=x', 'u(A)']);
+  });
+
+  it('formats all cells of a spill, and gives each its own format back', async () => {
+    const excel = fakeExcel({ sheets: { S: { cells: {}, formats: { B2: '0%' } } } });
+    const host = excelPaneHost(excelPort(excel.run), '.', excel.run);
+    await host.write([{ sheet: 'S', row: 1, col: 2, formula: '=A1:A3', spill: { rows: 3, cols: 1 }, numberFormat: '0.000' }]);
+    expect(['B1', 'B2', 'B3', 'B4'].map((c) => excel.format('S', c))).toEqual(['0.000', '0.000', '0.000', 'General']);
+    await host.undo();
+    expect(['B1', 'B2', 'B3'].map((c) => excel.format('S', c))).toEqual(['General', '0%', 'General']);
+  });
+
+  it('leaves nothing behind of a step that Excel refuses, and says why', async () => {
+    const sheet = { cells: { A1: 'old' } as Record<string, FakeCell>, locked: ['A2'] };
+    const excel = fakeExcel({ sheets: { S: sheet } });
+    const host = excelPaneHost(excelPort(excel.run), '.', excel.run);
+    await expect(host.write([{ sheet: 'S', row: 1, col: 1, value: 1 }, { sheet: 'S', row: 2, col: 1, value: 2 }])).rejects.toThrow('Excel does not allow it: the sheet or the workbook is protected');
+    expect(excel.text('S', 'A1')).toBe('old');
+    expect(host.undoable).toBe(0);
+  });
+
+  it('keeps a step that could not be taken back', async () => {
+    const sheet = { cells: {} as Record<string, FakeCell>, locked: [] as string[] };
+    const excel = fakeExcel({ sheets: { S: sheet } });
+    const host = excelPaneHost(excelPort(excel.run), '.', excel.run);
+    await host.write([{ sheet: 'S', row: 1, col: 1, value: 1 }]);
+    sheet.locked.push('A1');
+    await expect(host.undo()).rejects.toThrow('protected');
+    sheet.locked.pop();
+    expect(await host.undo()).toBe(true);
+    expect(excel.text('S', 'A1')).toBe('');
+  });
+
+  it('tells of changes and calculations, gathered, and of the selection, until it is told to stop', async () => {
+    const excel = fakeExcel({ sheets: { S: { cells: {} } } });
+    const port = excelPort(excel.run);
+    const host = excelPaneHost(port, '.', excel.run);
+    let [changes, moves] = [0, 0];
+    const stops = [host.onChange(() => changes++), host.onSelection(() => moves++)];
+    const pause = (ms: number) => new Promise((later) => setTimeout(later, ms));
+    await pause(5);
+    const before = port.revision();
+    for (const event of ['changed', 'calculated', 'calculated', 'selection']) excel.fire(event);
+    expect(port.revision()).toBeGreaterThan(before);
+    await pause(200);
+    expect([changes, moves]).toEqual([1, 1]);
+    stops.forEach((stop) => stop());
+    await pause(5);
+    expect(['changed', 'calculated', 'selection'].map((event) => excel.listeners(event))).toEqual([0, 0, 0]);
   });
 });
 

@@ -1,4 +1,4 @@
-import { beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { excelPort } from '../../../addin/excel/excelPort';
 import { openBook } from '../../../addin/desk/book/openBook';
 import { bookPort } from '../../../addin/desk/sheet/bookPort';
@@ -7,11 +7,7 @@ import { WorkingBook } from '../../../addin/desk/sheet/WorkingBook';
 import { callOn } from '../../functions/carry/callOn';
 import { smallBook } from '../../desk/sheet/smallBook';
 import { fakeExcel } from './fakeExcel';
-import type { FakeBook } from './fakeExcel';
-
-beforeAll(() => {
-  Object.assign(globalThis, { Excel: { RangeValueType: { empty: 'Empty', error: 'Error' } } });
-});
+import type { FakeBook, FakeCell } from './fakeExcel';
 
 const cells = {
   A1: 'Volume', B1: 'Factor', C1: 'Result', A2: 10, B2: 2, C2: { f: '=A2*B2*Twice', v: 40 }, A3: 20, B3: 3, C3: { f: '=A3*B3*Twice', v: 120 },
@@ -44,8 +40,32 @@ describe('the port over Office.js', () => {
     expect(found).toEqual([{ value: 20, formula: '=RC[-3]:R[1]C[-3]*2', array: { rows: 2, cols: 1 } }, { value: 40, partOf: { row: 2, col: 4 } }]);
   });
 
+  it('counts a formatted cell as used, for a formula that shows nothing may stand there', async () =>
+    expect(await excelPort(fakeExcel({ sheets: { S: { cells: { B2: 1 }, formats: { D9: '0.0' } } } }).run).sheets()).toEqual([{ name: 'S', rows: 9, cols: 4 }]));
+
+  it('leaves out names whose references are relative or cannot be read: a formula that uses one is refused', async () => {
+    const relative = fakeExcel({
+      sheets: { S: { cells: { A1: 2, B1: 3, C1: { f: '=B1*Left', v: 6 } } } },
+      names: [{ name: 'Left', formula: '=S!A1' }, { name: 'Half', formula: '=S!$A1' }, { name: 'Torn', formula: '=S!$A$1+' }, { name: 'Fixed', formula: '=S!$A$1' }],
+    });
+    const port = excelPort(relative.run);
+    expect((await port.names()).map((n) => n.name)).not.toContain('Left');
+    expect((await port.names()).map((n) => n.name)).toContain('Fixed');
+    expect((await port.names()).map((n) => n.name)).not.toContain('Half');
+    const [[shown]] = await callOn(port, 'UNC_CARRY', ['S!C1'], ['S!B1', { literal: 0.1 }]);
+    expect(shown).toMatch(/^#VALUE! UNC_CARRY: cell C1 .*Left|^#VALUE! UNC_CARRY: cell C1 .*#NAME\?/);
+  });
+
   it('tells which rows do not show, and which of them a filter leaves out', async () =>
     expect(await excelPort(fakeExcel(book).run).hiddenRows("Lab's")).toEqual([{ row: 2, filtered: false }, { row: 3, filtered: true }]));
+
+  it('a filter of a table leaves out rows of its body alone, wherever the used range begins', async () => {
+    const filtered = fakeExcel({
+      sheets: { S: { cells: Object.fromEntries([3, 4, 5, 6, 7, 8].map((r) => [`B${r}`, r])), hiddenRows: [5, 7, 8] } },
+      tables: [{ name: 'T', address: 'S!B3:B7', columns: ['x'], showTotals: true, isFiltered: true }],
+    });
+    expect(await excelPort(filtered.run).hiddenRows('S')).toEqual([{ row: 5, filtered: true }, { row: 7, filtered: false }, { row: 8, filtered: false }]);
+  });
 
   it('takes a cell of a protected sheet for hidden where its formula may be', async () => {
     const locked = fakeExcel({ sheets: { S: { cells: { A1: 1, B1: { f: '=A1*2', v: 2 }, C1: { f: '=A1*3', v: 3 } }, isProtected: true, hiddenFormulas: ['B1'] } } });
@@ -72,6 +92,22 @@ describe('the port over Office.js', () => {
   it('refuses to read what is too large, in words', () =>
     expect(excelPort(fakeExcel(book).run).read([area(1, 1, 1048576, 16384)])).rejects.toThrow('17179869184 cells would have to be read at once'));
 
+  it('reads in several trips what one does not carry, and cuts in halves what is still too large', async () => {
+    const column = Object.fromEntries(Array.from({ length: 3000 }, (_, i) => [`A${i + 1}`, i]));
+    const wide = fakeExcel({ sheets: { S: { cells: column } } });
+    const whole = { sheet: 'S', row: 1, col: 1, rows: 3000, cols: 16 };
+    const [{ cells: found }] = await excelPort(wide.run).read([whole]);
+    expect(wide.count).toEqual({ runs: 1, syncs: 2 }); // 48,000 cells, 25,000 a trip
+    expect(found.length).toBe(48_000);
+    expect([found[0], found[1], found[16], found[2999 * 16]]).toEqual([{ value: 0 }, null, { value: 1 }, { value: 2999 }]);
+    const narrow = fakeExcel({ sheets: { S: { cells: column } }, mostCells: 7000 });
+    expect((await excelPort(narrow.run).read([whole]))[0].cells).toEqual(found);
+    await expect(excelPort(fakeExcel({ sheets: { S: { cells: column } }, mostCells: 15 }).run).read([whole])).rejects.toThrow('Excel does not send so much at once: refer to smaller ranges');
+  });
+
+  it('says in words what Excel refuses', () =>
+    expect(excelPort(fakeExcel(book).run).read([{ ...area(1, 1, 1, 1), sheet: 'Gone' }])).rejects.toThrow('Excel does not find a sheet any more'));
+
   it('has a new revision in every turn, and one within a turn', async () => {
     const port = excelPort(fakeExcel(book).run);
     const first = port.revision();
@@ -90,6 +126,49 @@ describe('the port over Office.js', () => {
     expect(b).toEqual(a);
     // c(A) = √B, c(B) = A/(2√B)
     expect(a[0][0]).toBeCloseTo(Math.hypot(Math.sqrt(2.3) * 0.1, (10.1 / (2 * Math.sqrt(2.3))) * 0.07), 12);
+  });
+
+  describe('array formulas of before spills', () => {
+    // C1:C3 {=A1:A3*2}: every cell shows the same formula
+    const doubled = { C1: { f: '=A1:A3*2', v: 10 }, C2: { f: '=A1:A3*2', v: 10 }, C3: { f: '=A1:A3*2', v: 14 } };
+    const legacyBook = (more: Record<string, FakeCell> = {}): FakeBook => ({ sheets: { S: { cells: { A1: 5, A2: 5, A3: 7, B1: 0.1, B2: 0.2, B3: 0.3, ...doubled, ...more }, legacy: { C1: [3, 1] } } } });
+
+    it('are told from formulas of their own', async () => {
+      const [{ cells: found }] = await excelPort(fakeExcel(legacyBook()).run).read([{ sheet: 'S', row: 1, col: 3, rows: 3, cols: 1 }]);
+      expect(found).toEqual([{ value: 10, formula: '=RC[-2]:R[2]C[-2]*2', array: { rows: 3, cols: 1 } }, { value: 10, partOf: { row: 1, col: 3 } }, { value: 14, partOf: { row: 1, col: 3 } }]);
+    });
+
+    it('give the u of the right row where two rows show the same, as on the desk', async () => {
+      const args = ['S!A1:A3', 'S!B1:B3'];
+      const desk = bookPort(new WorkingBook(openBook(smallBook({ S: { A1: 5, A2: 5, A3: 7, B1: 0.1, B2: 0.2, B3: 0.3, C1: { f: 'A1:A3*2', v: 10, legacy: 'C1:C3' }, C2: 10, C3: 14 } })), new FunctionNames([])));
+      const there = await callOn(excelPort(fakeExcel(legacyBook()).run), 'UNC_CARRY', ['S!C1:C3'], args);
+      expect(there).toEqual([[0.2], [0.4], [0.6]]); // 2 u(A)
+      expect(there).toEqual(await callOn(desk, 'UNC_CARRY', ['S!C1:C3'], args));
+    });
+
+    it('are refused where their range cannot be told', async () => {
+      const port = excelPort(fakeExcel(legacyBook()).run);
+      for (const rows of [1, 2]) {
+        const [{ cells: found }] = await port.read([{ sheet: 'S', row: 1, col: 3, rows, cols: 1 }]);
+        expect(found.map((c) => c?.formula)).toEqual(Array(rows).fill('=LEGACY.ARRAY()'));
+      }
+      const corner = fakeExcel({ sheets: { S: { cells: { A1: 1, C1: { f: '=$A$1', v: 1 }, C2: { f: '=$A$1', v: 1 }, D1: { f: '=$A$1', v: 1 } }, saved: ['C1', 'C2', 'D1'] } } });
+      expect((await callOn(excelPort(corner.run), 'UNC_CARRY', ['S!C2'], ['S!A1', { literal: 0.1 }]))[0][0]).toContain('cell C2 uses LEGACY.ARRAY');
+    });
+
+    it('are not seen in formulas that are merely alike', async () => {
+      // filled down: each saved as an array formula for itself; and the same text in two cells that are no arrays
+      const alike = fakeExcel({ sheets: { S: { cells: { A1: 1, A2: 2, B1: { f: '=SUM(A1:A1*2)', v: 2 }, B2: { f: '=SUM(A2:A2*2)', v: 4 }, D1: { f: '=$A$1', v: 1 }, D2: { f: '=$A$1', v: 1 } }, saved: ['B1', 'B2'] } } });
+      const [{ cells: found }] = await excelPort(alike.run).read([{ sheet: 'S', row: 1, col: 1, rows: 2, cols: 4 }]);
+      expect(found.map((c) => c?.formula)).toEqual([undefined, '=SUM(RC[-1]:RC[-1]*2)', undefined, '=R1C1', undefined, '=SUM(RC[-1]:RC[-1]*2)', undefined, '=R1C1']);
+      expect(found.some((c) => c?.array || c?.partOf)).toBe(false);
+    });
+  });
+
+  it('takes a blank-looking cell of a spill for a part of it', async () => {
+    const spilled = fakeExcel({ sheets: { S: { cells: { A1: 1, B1: { f: '=IF(A1:A2>0,A1:A2,"")', v: 1 } }, spills: { B1: [2, 1] } } } });
+    const [{ cells: found }] = await excelPort(spilled.run).read([{ sheet: 'S', row: 2, col: 2, rows: 1, cols: 1 }]);
+    expect(found[0]).toMatchObject({ partOf: { row: 1, col: 2 } });
   });
 
   it('a property that was not loaded throws in the fake, as in Excel', async () => {
