@@ -28,6 +28,9 @@ export async function writeColumn(
 ): Promise<'written' | 'asked' | 'failed'> {
   if (where.row < 2) return say('There is no row above the results for headings: insert one first', true), 'failed';
   const whole = { ...where, row: where.row - 1, rows: where.rows + 1 };
+  const table = (await host.port.tables()).find(({ area: a }) =>
+    a.sheet === where.sheet && a.row < where.row + where.rows && where.row < a.row + a.rows && a.col < where.col + where.cols && where.col < a.col + a.cols);
+  if (table) return say(`A formula cannot spill inside table ${table.name}: choose a column outside it`, true), 'failed';
   const taken = await occupied(host.port, whole);
   if (taken.length > 0 && !again) {
     say(`${taken.length === 1 ? `${taken[0]} is` : `${taken.slice(0, 3).join(', ')}${taken.length > 3 ? ` and ${taken.length - 3} more are` : ' are'}`} occupied. Press again to write over, or choose another place.`, true);

@@ -9,6 +9,9 @@ import { resultCallFor } from '../../addin/pane/budgetOf';
 import { carryCalls } from '../../addin/pane/carryCalls';
 import { formatOf } from '../../addin/pane/form';
 import { inputsOf } from '../../addin/pane/inputsOf';
+import type { PaneHost } from '../../addin/pane/PaneHost';
+import { writeColumn } from '../../addin/pane/writeColumn';
+import type { Written } from '../../addin/pane/writeColumn';
 import { proposeKind } from '../../addin/pane/steps/evidence';
 import { builtFunctions } from '../desk/sheet/bundle';
 import { smallBook } from '../desk/sheet/smallBook';
@@ -54,6 +57,35 @@ describe('calls in the sheet', () => {
       await session.edit([{ sheet: 0, row: 2, col: 9, content: { formula: `=ROOTSUM.UNC_CARRY(G2,A2:A3,CHOOSE({1,2,3,4},D2,"inf","normal","${word}"))` } }]);
       expect(value(session, 2, 9)).toBeCloseTo(u, 12);
     }
+  });
+});
+
+describe('a column that the pane writes', () => {
+  const table = { name: 'T', area: area(1, 1, 3, 4), columns: [], headerRows: 1, totalsRows: 0 };
+  async function write(where: ReturnType<typeof area>, again = false, tables = [] as (typeof table)[]) {
+    const session = await open();
+    const port = { ...bookPort(session.desk.working), tables: async () => tables };
+    const told: string[] = [];
+    const edits: unknown[] = [];
+    const host = { port, write: async (e: readonly unknown[]) => void edits.push(...e), show: async () => undefined } as unknown as PaneHost;
+    const written: Written[] = [];
+    const done = await writeColumn({ host, say: (text) => told.push(text), written }, where, ['u'], '=ROOTSUM.STDU_FROM_TOL(D2:D3)', again);
+    return { done, told: told.at(-1), edits: edits.length, written };
+  }
+
+  it('goes to a free place, and into the plan', async () => {
+    const { done, told, edits, written } = await write(area(2, 8, 2));
+    expect([done, told, edits]).toEqual(['written', 'u written into S!H2:H3', 2]);
+    expect(written).toEqual([{ sheet: 'S', anchor: 'H1', header: 'u', formula: '=ROOTSUM.STDU_FROM_TOL(D2:D3)', mode: 'spill', rows: '2:3' }]);
+  });
+  it('asks before it covers anything, and then does', async () => {
+    expect(await write(area(2, 4, 2))).toMatchObject({ done: 'asked', told: 'D1, D2, D3 are occupied. Press again to write over, or choose another place.', edits: 0 });
+    expect(await write(area(2, 4, 2), true)).toMatchObject({ done: 'written', edits: 2 });
+  });
+  it('does not spill into a table, nor where there is no row for a heading', async () => {
+    expect(await write(area(2, 4, 2), true, [table])).toMatchObject({ done: 'failed', told: 'A formula cannot spill inside table T: choose a column outside it', edits: 0 });
+    expect(await write(area(2, 5, 2), true, [table])).toMatchObject({ done: 'written' });
+    expect(await write(area(1, 8, 2))).toMatchObject({ done: 'failed', edits: 0 });
   });
 });
 
