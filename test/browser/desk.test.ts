@@ -34,6 +34,12 @@ const paneText = (page: Page) => page.locator('.rootsum-pane .panel');
 const longBook = (rows: number): Uint8Array => buildBook({ sheets: [{ name: 'Long', xml: `<sheetData>${Array.from({ length: rows }, (_, i) =>
   `<row r="${i + 1}"><c r="A${i + 1}"><v>${i + 1}</v></c><c r="B${i + 1}"><v>${2 * (i + 1)}</v></c><c r="C${i + 1}"><f>A${i + 1}+B${i + 1}</f><v>${3 * (i + 1)}</v></c></row>`).join('')}</sheetData>` }] });
 
+/** What the accessibility rules object to. The page's own policy forbids scripts from elsewhere; this one comes through the debugger. */
+async function objections(page: Page, where: string): Promise<string[]> {
+  const found = await page.evaluate(`(() => { ${axe}; return axe.run(document, { resultTypes: ['violations'] }); })()`) as { violations: { id: string; nodes: { html: string; failureSummary?: string }[] }[] };
+  return found.violations.map((v) => `${where} ${v.id}: ${v.nodes[0].html.slice(0, 200)} ${v.nodes[0].failureSummary ?? ''}`);
+}
+
 /** Clicks the first cell and, with shift, the last. */
 async function select(page: Page, from: [number, number], to = from): Promise<void> {
   await cell(page, ...from).click();
@@ -77,6 +83,7 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     await page.getByRole('button', { name: 'Write the column' }).click();
     await expect.poll(() => line(page).textContent()).toBe('u(Tolerance) written into Results!F4:F15');
     await page.screenshot({ path: join(pictures, 'evidence.png') });
+    expect(await objections(page, 'evidence with its contents')).toEqual([]);
     // carry
     await step(page, '2 Carry');
     await select(page, [4, 5], [15, 5]);
@@ -87,6 +94,7 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     await page.getByRole('button', { name: 'Write the column' }).click();
     await expect.poll(() => line(page).textContent()).toBe('u(Result) written into Results!G4:G15');
     await page.screenshot({ path: join(pictures, 'carry.png') });
+    expect(await objections(page, 'carry with its contents')).toEqual([]);
     // budget, live
     await step(page, '3 Budget');
     await cell(page, 5, 5).click();
@@ -95,6 +103,7 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     await cell(page, 6, 7).click();
     await expect.poll(() => paneText(page).locator('h2').textContent()).toBe('Results!E6');
     await page.screenshot({ path: join(pictures, 'budget.png') });
+    expect(await objections(page, 'budget with its contents')).toEqual([]);
     await page.getByRole('button', { name: 'Insert into the sheet' }).click();
     await expect.poll(() => line(page).textContent()).toMatch(/^Uncertainty budget of Results!E6 written into Results!I5:T\d+$/);
     expect(await cell(page, 5, 9).textContent()).toBe('Source');
@@ -111,11 +120,13 @@ describe.runIf(browserPath)('the desk in a browser', () => {
     await page.getByRole('button', { name: 'Write the columns' }).click();
     await expect.poll(() => line(page).textContent()).toMatch(/^Decision, Rule written/);
     await page.screenshot({ path: join(pictures, 'report.png') });
+    expect(await objections(page, 'report with its contents')).toEqual([]);
     // check
     await step(page, '5 Check');
     await page.getByRole('button', { name: 'Audit now' }).click();
     await expect.poll(() => paneText(page).textContent()).toContain('12 formulas followed, 12 agree');
     await page.screenshot({ path: join(pictures, 'check.png') });
+    expect(await objections(page, 'check with its contents')).toEqual([]);
     const [planFile] = await Promise.all([page.waitForEvent('download'), page.getByRole('button', { name: 'Save the plan' }).click()]);
     await planFile.saveAs(join(folder, 'plan.json'));
     const plan = JSON.parse(readFileSync(join(folder, 'plan.json'), 'utf8')) as { columns: { header: unknown; anchor: string }[] };
@@ -303,9 +314,7 @@ describe.runIf(browserPath)('the desk in a browser', () => {
             await page.getByLabel('Results', { exact: true }).press('Tab');
             await expect.poll(() => page.locator('fieldset').count()).toBeGreaterThan(0);
           }
-          // the page's own policy forbids scripts from elsewhere; the tool comes through the debugger
-          const found = await page.evaluate(`(() => { ${axe}; return axe.run(document, { resultTypes: ['violations'] }); })()`) as { violations: { id: string; nodes: { html: string; failureSummary?: string }[] }[] };
-          expect(found.violations.map((v) => `${title} ${name} ${v.id}: ${v.nodes[0].html.slice(0, 200)} ${v.nodes[0].failureSummary ?? ''}`)).toEqual([]);
+          expect(await objections(page, `${title} ${name}`)).toEqual([]);
           await page.screenshot({ path: join(pictures, `${title.slice(2).toLowerCase()}-${scheme}-${name}.png`) });
         }
       }
