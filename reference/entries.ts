@@ -11,7 +11,7 @@ export const entries: Readonly<Record<string, Entry>> = {
   },
   STDU_FROM_RANGE: {
     purpose: 'A quantity is only known to lie between two limits, which need not lie evenly about the value in use.',
-    example: { story: 'A handbook gives limits of 16.40 and 16.92 for an expansion coefficient in 1e-6/°C; all values between are equally likely (JCGM 100:2008, 4.3.7 note, has 16.66 and 0.15).', cells: { A2: 16.4, B2: 16.92 }, at: 'C2', formula: '=ROOTSUM.STDU_FROM_RANGE(A2, B2)', shows: [['16.66', '0.150']] },
+    example: { story: 'A handbook gives limits of 16.40 and 16.92 for an expansion coefficient in 1e-6/°C; all values between are equally likely (JCGM 100:2008, 4.3.8, has 16.66 and 0.15).', cells: { A2: 16.4, B2: 16.92 }, at: 'C2', formula: '=ROOTSUM.STDU_FROM_RANGE(A2, B2)', shows: [['16.66', '0.150']] },
     formula: 'midpoint (a₋ + a₊)/2 and u = (a₊ − a₋)/2·f with the f of the shape',
     source: 'JCGM 100:2008, 4.3.7, equations (6) and (7)',
     cautions: ['The midpoint is the best estimate. If your sheet uses another value, that difference is a bias, not part of this u.'],
@@ -161,7 +161,7 @@ export const entries: Readonly<Record<string, Entry>> = {
     example: { story: 'An upper limit of 50 mg/L, u = 1.2 mg/L, risk 5 %.', cells: { A2: 50, B2: 1.2 }, at: 'C2', formula: '=ROOTSUM.UNC_GUARD(A2, B2)', shows: [['48.03']] },
     formula: 'limit ∓ z·u with z the quantile at 1 − risk',
     source: 'JCGM 106:2012, 8.3.2 and 8.3.3',
-    cautions: ['Agree on the rule with the customer before the measurement (ISO/IEC 17025:2017, 7.1.3).'],
+    cautions: ['Agree on the rule with the customer before the measurement (ISO/IEC 17025:2017, 7.1.3, from memory).'],
   },
   UNC_DECIDE: {
     purpose: 'Pass, conditional or fail, with the rule in words.',
@@ -237,7 +237,7 @@ export const entries: Readonly<Record<string, Entry>> = {
     purpose: 'Write down by which version a record was computed.',
     example: { story: 'The record of a workbook.', cells: {}, at: 'A1', formula: '=INDEX(ROOTSUM.LIBRARY_VERSION(), 1, 1)', shows: [['0.1.0']] },
     formula: 'the version of the library, as text',
-    source: 'ISO/IEC 17025:2017, 7.11.2 (software is validated by version)',
+    source: 'ISO/IEC 17025:2017, 7.11.2 (from memory)',
     cautions: ['It changes when the add-in is updated: keep it as a value in the record.'],
   },
 };

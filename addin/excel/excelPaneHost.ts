@@ -69,6 +69,7 @@ export function excelPaneHost(port: ExcelPort, decimalSeparator: '.' | ',', give
         port.changed();
       }
       steps.push(before);
+      return before;
     },
     undo: async () => {
       const step = steps[steps.length - 1];
@@ -78,15 +79,7 @@ export function excelPaneHost(port: ExcelPort, decimalSeparator: '.' | ',', give
       port.changed();
       return true;
     },
-    get undoable() { return steps.length; },
-    save: (name, text) => {
-      const address = URL.createObjectURL(new Blob([text]));
-      const link = document.createElement('a');
-      link.href = address;
-      link.download = name;
-      link.click();
-      setTimeout(() => URL.revokeObjectURL(address), 10_000);
-    },
+    stands: (step) => steps.some((own) => own === step),
   };
 }
 

@@ -1,4 +1,5 @@
 /// <reference types="office-js" />
+import { sheetCols, sheetRows } from '../../functions/address';
 import { PortRefusal } from '../../functions/workbook';
 import type { PortArea, PortCell, PortTile } from '../../functions/workbook';
 import { legacyArrays } from './legacyArrays';
@@ -122,8 +123,8 @@ function askGrown({ sheet, range, area }: Part): Grown | undefined {
   if (range.savedAsArray === false) return undefined;
   const top = Math.max(1, area.row - 1);
   const left = Math.max(1, area.col - 1);
-  const bottom = Math.min(1_048_576, area.row + area.rows);
-  const right = Math.min(16_384, area.col + area.cols);
+  const bottom = Math.min(sheetRows, area.row + area.rows);
+  const right = Math.min(sheetCols, area.col + area.cols);
   const around = sheet.getRangeByIndexes(top - 1, left - 1, bottom - top + 1, right - left + 1);
   around.load('formulas');
   return { range: around, top, left };

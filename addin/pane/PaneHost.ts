@@ -25,12 +25,19 @@ export interface PaneHost {
   onChange(changed: () => void): () => void;
   /** Selects cells and brings them into view. */
   show(area: PortArea): Promise<void>;
-  /** Writes cells as one step, which `undo` takes back as one. Whether they are free is the pane's question. */
-  write(edits: readonly PaneEdit[]): Promise<void>;
-  /** Takes back the last step that the pane wrote. False where there is none. */
+  /**
+   * Writes cells as one step, which `undo` takes back as one. Whether they are free is the pane's question.
+   *
+   * @returns what stands for the step.
+   * @throws Error with words, and nothing is written, where the host refuses.
+   */
+  write(edits: readonly PaneEdit[]): Promise<object>;
+  /**
+   * Takes back the last step that the pane wrote, and no other. False where there is none.
+   *
+   * @throws Error with words where it cannot be taken back, since the sheet was changed after it, say.
+   */
   undo(): Promise<boolean>;
-  /** How many steps can be taken back. */
-  readonly undoable: number;
-  /** Hands a text to the user as a file. */
-  save(name: string, text: string): void;
+  /** Whether a step that was written has not been taken back. */
+  stands(step: object): boolean;
 }

@@ -35,3 +35,13 @@ export function formatOf(values: readonly unknown[]): string | undefined {
   const places = Math.min(12, Math.max(0, 2 - Math.floor(Math.log10(Math.min(...sizes)))));
   return places === 0 ? '0' : `0.${'0'.repeat(places)}`;
 }
+
+/** The number in a field, with a point or a comma; undefined where it is blank, the text itself where it is none: the function says so. */
+export function numberIn({ value }: HTMLInputElement): number | string | undefined {
+  const text = value.trim();
+  const number = Number(text.replace(',', '.'));
+  return text === '' ? undefined : Number.isFinite(number) ? number : text;
+}
+
+/** An argument as it is typed into a formula. */
+export const typedArgument = (value: number | string | undefined): string => (typeof value === 'string' ? `"${value.replaceAll('"', '""')}"` : String(value ?? ''));

@@ -6,7 +6,6 @@ import { carryStep } from './steps/carry';
 import { checkStep } from './steps/check';
 import { evidenceStep } from './steps/evidence';
 import { reportStep } from './steps/report';
-import type { Written } from './writeColumn';
 
 /**
  * Puts the task pane into an element: the five steps of the job, what happened last, and a way back.
@@ -19,8 +18,7 @@ export function mountPane(root: HTMLElement, host: PaneHost): () => void {
     line.textContent = text;
     line.classList.toggle('wrong', wrong);
   };
-  const written: Written[] = [];
-  const context: StepContext = { host, say, written };
+  const context: StepContext = { host, say, written: [], asked: {} };
   const steps: Step[] = [evidenceStep(context), carryStep(context), budgetStep(context), reportStep(context), checkStep(context)];
   const panel = h('div', { class: 'panel', role: 'tabpanel', id: 'pane-panel', tabindex: 0 });
   const back = h('button', { type: 'button', onclick: () => void takeBack() }, 'Undo');
@@ -52,9 +50,11 @@ export function mountPane(root: HTMLElement, host: PaneHost): () => void {
   }
 
   async function takeBack(): Promise<void> {
-    if (!(await host.undo())) return say('Nothing to take back');
-    written.pop();
-    say('Taken back');
+    try {
+      say((await host.undo()) ? 'Taken back' : 'Nothing to take back');
+    } catch (problem) {
+      say(`Not taken back: ${(problem as Error).message}`, true);
+    }
   }
 
   fill(root, h('div', { class: 'rootsum-pane' },

@@ -2,6 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { openBook } from '../../addin/desk/book/openBook';
 import { bookPort } from '../../addin/desk/sheet/bookPort';
 import { Session } from '../../addin/desk/sheet/Session';
+import { deskPaneHost } from '../../addin/desk/page/deskPaneHost';
+import type { GridAccess } from '../../addin/desk/page/deskPaneHost';
 import { callAt, suggestions } from '../../addin/desk/page/completion';
 import { cellText, typedConstant } from '../../addin/desk/page/cellText';
 import { auditPort } from '../../addin/pane/auditPort';
@@ -10,8 +12,8 @@ import { carryCalls } from '../../addin/pane/carryCalls';
 import { formatOf } from '../../addin/pane/form';
 import { inputsOf } from '../../addin/pane/inputsOf';
 import type { PaneHost } from '../../addin/pane/PaneHost';
-import { writeColumn } from '../../addin/pane/writeColumn';
-import type { Written } from '../../addin/pane/writeColumn';
+import type { StepContext } from '../../addin/pane/Steps';
+import { writeColumns } from '../../addin/pane/writeColumns';
 import { proposeKind } from '../../addin/pane/steps/evidence';
 import { builtFunctions } from '../desk/sheet/bundle';
 import { smallBook } from '../desk/sheet/smallBook';
@@ -45,10 +47,17 @@ describe('calls in the sheet', () => {
     const [call] = await carryCalls(bookPort(session.desk.working), 'S');
     expect(call).toMatchObject({ name: 'UNC_CARRY', results: area(2, 3, 2), at: area(2, 8, 2) });
     expect(call.pairs).toEqual([area(2, 1, 2), area(2, 4, 2), area(1, 6), undefined]);
-    expect(await resultCallFor(bookPort(session.desk.working), area(3, 8))).toMatch(/no plain reference/);
+    expect(await resultCallFor(bookPort(session.desk.working), area(3, 8))).toMatch(/^The call in S!H2 cannot be repeated for one result here/);
     await session.edit([{ sheet: 0, row: 2, col: 8, content: { formula: '=ROOTSUM.UNC_REPORT(C2:C3,,A2:A3,D2:D3)', spill: { rows: 2, cols: 9 } } }]);
-    expect(await resultCallFor(bookPort(session.desk.working), area(3, 10))).toMatchObject({ result: area(3, 3), pairs: [area(3, 1), area(3, 4)] });
+    expect(await resultCallFor(bookPort(session.desk.working), area(3, 10))).toMatchObject({ result: area(3, 3), u: area(3, 9), pairs: [area(3, 1), area(3, 4)] });
     expect(await resultCallFor(bookPort(session.desk.working), area(1, 1))).toMatch(/^Select a result/);
+  });
+
+  it('give a result the inputs that reach it, wherever they stand', async () => {
+    const session = await open({ C2: { f: 'A3*B2*$F$1', v: 80 }, C3: { f: 'A2*B3*$F$1', v: 60 } });
+    await session.edit([{ sheet: 0, row: 2, col: 8, content: { formula: '=ROOTSUM.UNC_CARRY(C2:C3,A2:A3,D2:D3)', spill: { rows: 2, cols: 1 } } }]);
+    expect(await resultCallFor(bookPort(session.desk.working), area(2, 3))).toMatchObject({ result: area(2, 3), u: area(2, 8), pairs: [area(3, 1), area(3, 4)] });
+    expect(await resultCallFor(bookPort(session.desk.working), area(3, 8))).toMatchObject({ result: area(3, 3), u: area(3, 8), pairs: [area(2, 1), area(2, 4)] });
   });
 
   it('one row of evidence that serves several cells is independent in each, or one source for all, as was chosen', async () => {
@@ -60,32 +69,47 @@ describe('calls in the sheet', () => {
   });
 });
 
-describe('a column that the pane writes', () => {
+describe('columns that the pane writes', () => {
   const table = { name: 'T', area: area(1, 1, 3, 4), columns: [], headerRows: 1, totalsRows: 0 };
-  async function write(where: ReturnType<typeof area>, again = false, tables = [] as (typeof table)[]) {
+  const u = { headings: ['u'], formula: '=ROOTSUM.STDU_FROM_TOL(D2:D3)' };
+  async function pane(tables = [] as (typeof table)[]) {
     const session = await open();
-    const port = { ...bookPort(session.desk.working), tables: async () => tables };
     const told: string[] = [];
-    const edits: unknown[] = [];
-    const host = { port, write: async (e: readonly unknown[]) => void edits.push(...e), show: async () => undefined } as unknown as PaneHost;
-    const written: Written[] = [];
-    const done = await writeColumn({ host, say: (text) => told.push(text), written }, where, ['u'], '=ROOTSUM.STDU_FROM_TOL(D2:D3)', again);
-    return { done, told: told.at(-1), edits: edits.length, written };
+    const steps: number[] = [];
+    const host = { port: { ...bookPort(session.desk.working), tables: async () => tables }, write: async (e: readonly unknown[]) => ({ step: steps.push(e.length) }), show: async () => undefined } as unknown as PaneHost;
+    const context: StepContext = { host, say: (text) => told.push(text), written: [], asked: {} };
+    const press = async (where: ReturnType<typeof area>, columns = [u]) => [await writeColumns(context, where, columns), told.at(-1)];
+    return { context, steps, press };
   }
+  const occupied = 'D1, D2, D3 are occupied. Press again to write over, or choose another place.';
 
-  it('goes to a free place, and into the plan', async () => {
-    const { done, told, edits, written } = await write(area(2, 8, 2));
-    expect([done, told, edits]).toEqual(['written', 'u written into S!H2:H3', 2]);
-    expect(written).toEqual([{ sheet: 'S', anchor: 'H1', header: 'u', formula: '=ROOTSUM.STDU_FROM_TOL(D2:D3)', mode: 'spill', rows: '2:3' }]);
+  it('go to a free place as one step, and into the plan', async () => {
+    const { context, steps, press } = await pane();
+    expect(await press(area(2, 8, 2), [u, { headings: ['a', 'b'], formula: '=D2:E3' }])).toEqual([true, 'u, a, b written into S!H2:J3']);
+    expect(steps).toEqual([5]);
+    expect(context.written.map((w) => w.columns)).toEqual([[
+      { sheet: 'S', anchor: 'H1', header: 'u', formula: u.formula, mode: 'spill', rows: '2:3' },
+      { sheet: 'S', anchor: 'I1', header: ['a', 'b'], formula: '=D2:E3', mode: 'spill', rows: '2:3' },
+    ]]);
   });
-  it('asks before it covers anything, and then does', async () => {
-    expect(await write(area(2, 4, 2))).toMatchObject({ done: 'asked', told: 'D1, D2, D3 are occupied. Press again to write over, or choose another place.', edits: 0 });
-    expect(await write(area(2, 4, 2), true)).toMatchObject({ done: 'written', edits: 2 });
+  it('ask before they cover anything, and then do', async () => {
+    const { steps, press } = await pane();
+    expect(await press(area(2, 4, 2))).toEqual([false, occupied]);
+    expect(await press(area(2, 4, 2))).toEqual([true, 'u written into S!D2:D3']);
+    expect(await press(area(2, 4, 2))).toEqual([false, occupied]);
+    expect(steps).toEqual([2]);
   });
-  it('does not spill into a table, nor where there is no row for a heading', async () => {
-    expect(await write(area(2, 4, 2), true, [table])).toMatchObject({ done: 'failed', told: 'A formula cannot spill inside table T: choose a column outside it', edits: 0 });
-    expect(await write(area(2, 5, 2), true, [table])).toMatchObject({ done: 'written' });
-    expect(await write(area(1, 8, 2))).toMatchObject({ done: 'failed', edits: 0 });
+  it('ask again where the second press is for another place', async () => {
+    const { steps, press } = await pane();
+    await press(area(2, 4, 2));
+    expect(await press(area(2, 3, 2))).toEqual([false, occupied.replaceAll('D', 'C')]);
+    expect(steps).toEqual([]);
+  });
+  it('do not spill into a table, nor where there is no row for a heading', async () => {
+    const { press } = await pane([table]);
+    expect(await press(area(2, 4, 2))).toEqual([false, 'A formula cannot spill inside table T: choose a column outside it']);
+    expect(await press(area(2, 8, 2))).toEqual([true, 'u written into S!H2:H3']);
+    expect(await press(area(1, 8, 2))).toEqual([false, 'There is no row above the results for headings: insert one first']);
   });
 });
 
@@ -103,7 +127,7 @@ describe('a session', () => {
     const session = await open();
     await session.edit([{ sheet: 0, row: 2, col: 8, content: { formula: '=ROOTSUM.STDU_FROM_TOL(D2:D3)', spill: { rows: 2, cols: 1 } }, numberFormat: '0.00' }]);
     await session.edit([{ sheet: 0, row: 2, col: 1, content: { value: 11 } }]);
-    expect([value(session, 2, 3), value(session, 3, 8), session.undoable]).toEqual([44, expect.closeTo(0.2 / Math.sqrt(3), 12), 2]);
+    expect([value(session, 2, 3), value(session, 3, 8)]).toEqual([44, expect.closeTo(0.2 / Math.sqrt(3), 12)]);
     await session.undo();
     expect(value(session, 2, 3)).toBe(40);
     await session.undo();
@@ -113,10 +137,25 @@ describe('a session', () => {
   it('refuses to change part of an array, and a formula that cannot be read, and changes nothing then', async () => {
     const session = await open();
     await session.edit([{ sheet: 0, row: 2, col: 8, content: { formula: '=ROOTSUM.STDU_FROM_TOL(D2:D3)' } }]);
+    const before = session.lastStep;
     await expect(session.edit([{ sheet: 0, row: 9, col: 9, content: { value: 1 } }, { sheet: 0, row: 3, col: 8, content: { value: 1 } }])).rejects.toThrow('this cell shows part of an array');
     await expect(session.edit([{ sheet: 0, row: 9, col: 9, content: { formula: '=ROOTSUM.NO_SUCH(1)' } }])).rejects.toThrow('calls ROOTSUM.NO_SUCH, which is no function of this version');
-    expect([value(session, 9, 9), session.undoable]).toEqual([undefined, 1]);
+    expect([value(session, 9, 9), session.lastStep]).toEqual([undefined, before]);
     expect(session.textOf(0, 3, 8)).toBe('=ROOTSUM.STDU_FROM_TOL(D2:D3)');
+  });
+});
+
+describe('the desk as the host of the pane', () => {
+  it('takes back its own last step, and never what the user typed after it', async () => {
+    const session = await open();
+    const host = deskPaneHost(session, {} as GridAccess);
+    expect(await host.undo()).toBe(false);
+    const step = await host.write([{ sheet: 'S', row: 2, col: 8, value: 'x' }]);
+    await session.edit([{ sheet: 0, row: 2, col: 1, content: { value: 11 } }]);
+    await expect(host.undo()).rejects.toThrow('the sheet was changed since');
+    expect([value(session, 2, 1), host.stands(step)]).toEqual([11, true]);
+    await session.undo();
+    expect([await host.undo(), value(session, 2, 8), host.stands(step), await host.undo()]).toEqual([true, undefined, false, false]);
   });
 });
 

@@ -1,4 +1,4 @@
-import { toCol } from '@borgar/fx';
+import { cellName } from '../../../functions/engine/graph/address';
 import type { FunctionMetadata } from '../../../functions/metadata';
 import { namespace } from '../../../functions/names';
 import { callAt, suggestions } from './completion';
@@ -34,7 +34,7 @@ export class FormulaBar {
 
   /** Shows what a cell holds. */
   show(row: number, col: number, text: string): void {
-    this.place.textContent = `${toCol(col - 1)}${row}`;
+    this.place.textContent = cellName(row, col);
     this.shown = text;
     this.input.value = text;
     this.close();

@@ -1,4 +1,4 @@
-import { toCol } from '@borgar/fx';
+import { columnLetters } from '../../../functions/engine/graph/address';
 import { h } from '../../pane/dom';
 
 /** What the grid shows; rows and columns from 1. */
@@ -134,7 +134,7 @@ export class Grid {
     this.table.style.top = `${top * ROW_HEIGHT}px`;
     const columns = Array.from({ length: to - from }, (_, i) => from + i);
     const head = h('tr', { role: 'row', 'aria-rowindex': 1 }, h('th', { role: 'columnheader', class: 'corner', 'aria-colindex': 1 }, h('span', { class: 'unseen' }, 'Row')),
-      ...columns.map((c) => h('th', { role: 'columnheader', scope: 'col', 'aria-colindex': c + 2 }, toCol(c))));
+      ...columns.map((c) => h('th', { role: 'columnheader', scope: 'col', 'aria-colindex': c + 2 }, columnLetters(c + 1))));
     const rows: HTMLElement[] = [head];
     const { row: r0, col: c0, rows: rn, cols: cn } = this.selection;
     // the active cell stays reachable by the tabulator, in view or not

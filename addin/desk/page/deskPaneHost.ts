@@ -11,8 +11,9 @@ export interface GridAccess {
 }
 
 /** The desk's page as the host of the task pane. */
-export function deskPaneHost(session: Session, grid: GridAccess, save: (name: string, text: string) => void): PaneHost {
+export function deskPaneHost(session: Session, grid: GridAccess): PaneHost {
   const { working } = session.desk;
+  let own: object[] = [];
   return {
     port: bookPort(working),
     decimalSeparator: '.',
@@ -20,14 +21,24 @@ export function deskPaneHost(session: Session, grid: GridAccess, save: (name: st
     onSelection: (moved) => grid.onSelection(moved),
     onChange: (changed) => session.onChange(changed),
     show: async (area) => grid.show(area),
-    write: (edits) => session.edit(edits.map(({ sheet, row, col, value, formula, spill, numberFormat }) => ({
-      sheet: working.sheetIndex(sheet)!, row, col, numberFormat,
-      content: formula !== undefined ? { formula, spill } : { value: value! },
-      like: formula === undefined ? headingBeside(working, working.sheetIndex(sheet)!, row, col) : undefined,
-    }))),
-    undo: () => session.undo(),
-    get undoable() { return session.undoable; },
-    save,
+    write: async (edits) => {
+      await session.edit(edits.map(({ sheet, row, col, value, formula, spill, numberFormat }) => ({
+        sheet: working.sheetIndex(sheet)!, row, col, numberFormat,
+        content: formula !== undefined ? { formula, spill } : { value: value! },
+        like: formula === undefined ? headingBeside(working, working.sheetIndex(sheet)!, row, col) : undefined,
+      })));
+      const step = session.lastStep!;
+      own.push(step);
+      return step;
+    },
+    undo: async () => {
+      own = own.filter((step) => session.stands(step));
+      const step = own.at(-1);
+      if (!step) return false;
+      if (step !== session.lastStep) throw new Error('the sheet was changed since: take those changes back first, by the Undo above the sheet');
+      return session.undo();
+    },
+    stands: (step) => session.stands(step),
   };
 }
 

@@ -12,18 +12,20 @@ import { typedConstant } from './cellText';
 import { deskPaneHost } from './deskPaneHost';
 import type { GridAccess } from './deskPaneHost';
 import { fill, h } from '../../pane/dom';
+import { download } from '../../pane/download';
 import { FormulaBar } from './FormulaBar';
 import { Grid } from './Grid';
 import { loadFunctions } from './loadFunctions';
 import { sheetSource } from './sheetSource';
+import { cellsOfText, tabbedText } from './tabbedText';
 
 /** The page of the desk: a workbook, its formula line, and the task pane beside it. Nothing that is opened here leaves the machine. */
 class Page {
   private session: Session | undefined;
   private sheet = 0;
   private name = 'book.xlsx';
-  /** How many steps were saved, and the name of a file that would replace unsaved ones if it is opened once more. */
-  private savedSteps = 0;
+  /** The step after which the workbook was saved last, and the name of a file that would replace unsaved ones if it is opened once more. */
+  private savedStep: object | undefined;
   private warnedOf: string | undefined;
   private closePane: (() => void) | undefined;
   private readonly moved = new Set<() => void>();
@@ -73,7 +75,7 @@ class Page {
   }
 
   private get isUnsaved(): boolean {
-    return this.session !== undefined && this.session.undoable !== this.savedSteps;
+    return this.session !== undefined && this.session.lastStep !== this.savedStep;
   }
 
   async openFile(file: File): Promise<void> {
@@ -92,7 +94,7 @@ class Page {
       const book = openBook(new Uint8Array(await bytes()));
       const session = await Session.open(book, this.bundle, (done, of) => this.say(`Computing ${name}: ${done} of ${of} cells`));
       this.session = session;
-      this.savedSteps = 0;
+      this.savedStep = undefined;
       this.warnedOf = undefined;
       this.name = name;
       document.title = `${name} · Rootsum desk`;
@@ -119,7 +121,7 @@ class Page {
       onSelection: (moved) => { this.moved.add(moved); return () => this.moved.delete(moved); },
       show: (area) => this.show(area),
     };
-    this.closePane = mountPane(this.pane, deskPaneHost(session, access, download));
+    this.closePane = mountPane(this.pane, deskPaneHost(session, access));
   }
 
   private area(): PortArea | undefined {
@@ -241,11 +243,8 @@ class Page {
     if (!this.session || !this.inGrid()) return;
     const { row, col, rows, cols } = this.grid.selection;
     const source = sheetSource(this.session, this.sheet);
-    const lines = Array.from({ length: rows }, (_, r) => Array.from({ length: cols }, (_x, c) => {
-      const text = source.text(row + r, col + c);
-      return /[\t\n"]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text;
-    }).join('\t'));
-    event.clipboardData?.setData('text/plain', lines.join('\n'));
+    const cells = Array.from({ length: rows }, (_, r) => Array.from({ length: cols }, (_x, c) => source.text(row + r, col + c)));
+    event.clipboardData?.setData('text/plain', tabbedText(cells));
     event.preventDefault();
     this.say(`${rows} × ${cols} cells copied`);
   }
@@ -254,7 +253,7 @@ class Page {
     if (!this.session || !this.inGrid()) return;
     event.preventDefault();
     const { row, col } = this.grid.active;
-    const cells = tabbed(event.clipboardData?.getData('text/plain') ?? '');
+    const cells = cellsOfText(event.clipboardData?.getData('text/plain') ?? '');
     const edits = cells.flatMap((line, r) => line.map((text, c): CellEdit => ({
       sheet: this.sheet, row: row + r, col: col + c, content: text === '' ? null : text.startsWith('=') && text.length > 1 ? { formula: text } : { value: typedConstant(text) },
     })));
@@ -270,8 +269,8 @@ class Page {
     try {
       const bytes = await this.session.write(values);
       const name = this.name.replace(/(\.xls[xm])$/i, values ? '-values$1' : '-rootsum$1');
-      downloadBytes(name, bytes);
-      if (!values) this.savedSteps = this.session.undoable;
+      download(name, bytes);
+      if (!values) this.savedStep = this.session.lastStep;
       this.say(`${name} was saved with everything else in the file as it was`);
     } catch (problem) {
       if (!(problem instanceof BookError)) throw problem;
@@ -283,25 +282,6 @@ class Page {
     this.status.textContent = text;
     this.status.classList.toggle('wrong', wrong);
   }
-}
-
-/** Cells of a text from the clipboard: tabs between, one row a line, quotes doubled inside quotes. */
-function tabbed(text: string): string[][] {
-  const rows: string[][] = [[]];
-  for (const [, quoted, plain, end] of text.replace(/\r\n?/g, '\n').replace(/\n$/, '').matchAll(/(?:"((?:[^"]|"")*)"|([^\t\n]*))(\t|\n|$)/g)) {
-    rows[rows.length - 1].push(quoted !== undefined ? quoted.replaceAll('""', '"') : plain);
-    if (end === '\n') rows.push([]);
-    if (end === '') break;
-  }
-  return rows;
-}
-
-const download = (name: string, text: string): void => downloadBytes(name, new TextEncoder().encode(text));
-
-function downloadBytes(name: string, bytes: Uint8Array): void {
-  const address = URL.createObjectURL(new Blob([bytes as Uint8Array<ArrayBuffer>]));
-  h('a', { href: address, download: name }).click();
-  setTimeout(() => URL.revokeObjectURL(address), 10_000);
 }
 
 /** The command says which book it serves; without one it is the demo. */

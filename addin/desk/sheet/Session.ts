@@ -49,8 +49,14 @@ export class Session {
     return session;
   }
 
-  get undoable(): number {
-    return this.steps.length;
+  /** The last step that was not taken back: the same object as long as the workbook is in this state. */
+  get lastStep(): object | undefined {
+    return this.steps.at(-1);
+  }
+
+  /** Whether a step has not been taken back. */
+  stands(step: object): boolean {
+    return this.steps.some((own) => own === step);
   }
 
   /** Calls back after every step, until the returned function is called. */
@@ -133,10 +139,9 @@ export class Session {
     if (numberFormat !== undefined) for (const key of styledCells({ sheet, row, col, content, numberFormat })) working.styles.set(key, { numberFormat });
   }
 
-  /** Whether a formula may fill more than its cell: one of the library's functions does, and one that computes with ranges. */
+  /** Whether a formula may fill more than its cell: each of the library's functions may. */
   private isArray(stored: string): boolean {
-    return /_xldudf_/i.test(stored) || /_xlfn\.(_xlws\.)?(SORT|SORTBY|FILTER|UNIQUE|SEQUENCE|TEXTSPLIT|[VH]STACK|TAKE|DROP|TO(COL|ROW)|WRAP(ROWS|COLS)|MAP|SCAN|BY(ROW|COL)|MAKEARRAY|CHOOSE(COLS|ROWS)|EXPAND)\b/i.test(stored)
-      || this.desk.needsArray(stored);
+    return /_xldudf_/i.test(stored) || this.desk.needsArray(stored);
   }
 
   private restore(sheet: number, row: number, col: number, before: WorkingCell | null): void {

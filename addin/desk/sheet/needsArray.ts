@@ -13,7 +13,7 @@ export function needsArray(e: Expression | null): boolean {
     case 'binary':
       return [e.left, e.right].some((side) => isRange(side) || needsArray(side));
     case 'call':
-      return e.args.some((arg, i) => needsArray(arg) || (!e.native.lazy && kindAt(e.native.kinds, e.native.repeating, i) !== 'range' && isRange(arg)));
+      return GIVES_ARRAYS.has(e.native.name) || e.args.some((arg, i) => needsArray(arg) || (!e.native.lazy && kindAt(e.native.kinds, e.native.repeating, i) !== 'range' && isRange(arg)));
     case 'host':
     case 'apply':
       return e.args.some(needsArray);
@@ -28,6 +28,11 @@ export function needsArray(e: Expression | null): boolean {
       return false;
   }
 }
+
+/** Functions that came with dynamic arrays: a formula with one of them is stored as such, whatever it gives. */
+const GIVES_ARRAYS = new Set(`
+  BYCOL BYROW CHOOSECOLS CHOOSEROWS DROP EXPAND FILTER HSTACK MAKEARRAY MAP SCAN SEQUENCE SORT SORTBY TAKE TEXTSPLIT TOCOL TOROW UNIQUE VSTACK
+  WRAPCOLS WRAPROWS`.trim().split(/\s+/));
 
 /** Several cells for certain, or what may be: a part of a table that is not its row. */
 function isRange(e: Expression | null): boolean {

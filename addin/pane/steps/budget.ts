@@ -7,7 +7,8 @@ import type { LibraryCell } from '../callLibrary';
 import { fill, h } from '../dom';
 import { button, field, figures, table, textField } from '../form';
 import type { Step, StepContext } from '../Steps';
-import { writeColumn } from '../writeColumn';
+import { cellsOf } from '../cells';
+import { writeColumns } from '../writeColumns';
 
 /** Step 3: where the uncertainty of the selected result comes from, live as the selection moves. */
 export function budgetStep(context: StepContext): Step {
@@ -17,7 +18,6 @@ export function budgetStep(context: StepContext): Step {
   let current: (ResultCall & { readonly size: { readonly rows: number; readonly cols: number } }) | undefined;
   let stop: (() => void)[] = [];
   let turn = 0;
-  let again = false;
 
   async function show(): Promise<void> {
     const mine = ++turn;
@@ -32,9 +32,15 @@ export function budgetStep(context: StepContext): Step {
     if (mine !== turn) return;
     const wrong = problemOf(cells[0][0]);
     if (wrong !== undefined) return fill(view, h('p', { class: 'wrong' }, wrong));
+    const combined = cells.find((r) => typeof r[0] === 'string' && r[0].startsWith('Combined'))?.[cells[0].findIndex((c) => typeof c === 'string' && c.startsWith('Component'))];
+    const [[shown]] = await cellsOf(host.port, found.u);
+    if (mine !== turn) return;
+    if (typeof combined !== 'number' || typeof shown?.value !== 'number' || Math.abs(combined - shown.value) > 1e-9 * combined) {
+      current = undefined;
+      return fill(view, h('p', { class: 'wrong' }, `What can be repeated here does not give the u in ${addressOf(found.u)}: write the budget with UNC_BUDGET`));
+    }
     current = { ...found, size: { rows: cells.length, cols: cells[0].length } };
     target.value = addressOf({ ...found.call.at, row: found.call.at.row, col: found.call.at.col + found.call.at.cols + 1, rows: 1, cols: 1 });
-    again = false;
     draw(cells);
   }
 
@@ -57,7 +63,7 @@ export function budgetStep(context: StepContext): Step {
     const at = areaOf(target.value, result.sheet);
     if (!at) return say('Give the cell for the heading as an address', true);
     const args = [addressOf(result, at.sheet), '', ...pairs.map((a) => addressOf(a, at.sheet))];
-    again = (await writeColumn(context, { sheet: at.sheet, row: at.row + 1, col: at.col, rows: size.rows, cols: size.cols }, [`Uncertainty budget of ${addressOf(result)}`], `=ROOTSUM.UNC_BUDGET(${args.join(',')})`, again)) === 'asked';
+    await writeColumns(context, { sheet: at.sheet, row: at.row + 1, col: at.col, rows: size.rows }, [{ headings: [`Uncertainty budget of ${addressOf(result)}`], formula: `=ROOTSUM.UNC_BUDGET(${args.join(',')})` }], [size.cols]);
   }
 
   const element = h('div', {}, h('p', {}, 'Select a result, or its u: the sources are listed, the largest first.'), view, field('Insert the table at', target), button('Insert into the sheet', () => void insert(), true));

@@ -7,7 +7,7 @@ import { button, choices, field, figures, formatOf, textField } from '../form';
 import { inputsOf } from '../inputsOf';
 import type { InputGroup } from '../inputsOf';
 import type { Step, StepContext } from '../Steps';
-import { writeColumn } from '../writeColumn';
+import { writeColumns } from '../writeColumns';
 
 interface Row {
   readonly group: InputGroup;
@@ -28,7 +28,6 @@ export function carryStep(context: StepContext): Step {
   const outcome = h('p', { role: 'status', class: 'outcome' });
   let area: PortArea | undefined;
   let rows: Row[] = [];
-  let again = false;
   let format: string | undefined;
 
   async function follow(fromSelection: boolean): Promise<void> {
@@ -100,14 +99,15 @@ export function carryStep(context: StepContext): Step {
 
   async function place(): Promise<void> {
     if (!area) return;
-    again = false;
     target.value = addressOf({ ...area, row: area.row - 1, col: await freeColumn(host.port, area, what.value === 'UNC_REPORT' ? REPORT.length : area.cols), rows: 1, cols: 1 });
     await preview();
   }
 
   async function preview(): Promise<void> {
-    if (!area || rows.every((r) => r.evidence.value.trim() === '' || r.sharing.value !== '')) return fill(outcome);
-    const given = rows.filter((r) => r.evidence.value.trim() !== '').map((r) => [r.group.area, areaOf(r.evidence.value, area!.sheet)] as const);
+    const told = rows.filter((r) => r.evidence.value.trim() !== '');
+    format = undefined;
+    if (!area || told.length === 0 || told.some((r) => r.sharing.value !== '')) return fill(outcome); // a tag is added only in the formula
+    const given = told.map((r) => [r.group.area, areaOf(r.evidence.value, area!.sheet)] as const);
     if (given.some(([, e]) => e === undefined)) return fill(outcome);
     const cells = await callLibrary(host.port, 'UNC_CARRY', [area, ...given.flat()]);
     format = formatOf(cells.map((line) => line[0]));
@@ -125,9 +125,9 @@ export function carryStep(context: StepContext): Step {
     const report = what.value === 'UNC_REPORT';
     const name = await headingOf(host.port, area);
     const formula = `=ROOTSUM.${what.value}(${[addressOf(area, area.sheet), ...(report ? [''] : []), ...args].join(',')})`;
-    const where = { sheet: area.sheet, row: area.row, col: at.col, rows: report ? area.rows * area.cols : area.rows, cols: report ? REPORT.length : area.cols };
+    const where = { sheet: area.sheet, row: area.row, col: at.col, rows: report ? area.rows * area.cols : area.rows };
     const headings = report ? REPORT : Array.from({ length: area.cols }, () => `u(${name || 'result'})`);
-    again = (await writeColumn(context, where, headings, formula, again, report ? undefined : format)) === 'asked';
+    await writeColumns(context, where, [{ headings, formula, numberFormat: report ? undefined : format }]);
   }
 
   const element = h('div', {},

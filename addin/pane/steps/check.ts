@@ -4,6 +4,7 @@ import { callLibrary, problemOf } from '../callLibrary';
 import { carryCalls } from '../carryCalls';
 import { cellsOf } from '../cells';
 import { fill, h } from '../dom';
+import { download } from '../download';
 import { button } from '../form';
 import type { Step, StepContext } from '../Steps';
 
@@ -42,9 +43,10 @@ export function checkStep({ host, say, written }: StepContext): Step {
   }
 
   function savePlan(): void {
-    if (written.length === 0) return say('Nothing has been written by the pane yet');
-    host.save('plan.json', `${JSON.stringify({ title: 'Columns written by the pane', columns: written }, null, 2)}\n`);
-    say(`The plan of ${written.length} columns was saved: rootsum apply adds them to other workbooks`);
+    const columns = written.filter(({ step }) => host.stands(step)).flatMap((w) => w.columns);
+    if (columns.length === 0) return say('Nothing that the pane has written stands in the workbook');
+    download('plan.json', `${JSON.stringify({ title: 'Columns written by the pane', columns }, null, 2)}\n`);
+    say(`The plan of ${columns.length} columns was saved: rootsum apply adds them to other workbooks`);
   }
 
   const element = h('div', {},

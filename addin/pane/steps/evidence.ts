@@ -4,9 +4,9 @@ import { callLibrary, problemOf } from '../callLibrary';
 import type { LibraryArgument } from '../callLibrary';
 import { freeColumn, headingOf, numbersIn } from '../cells';
 import { fill, h } from '../dom';
-import { button, choices, field, figures, formatOf, table, textField } from '../form';
+import { button, choices, field, figures, formatOf, numberIn, table, textField } from '../form';
 import type { Step, StepContext } from '../Steps';
-import { writeColumn } from '../writeColumn';
+import { writeColumns } from '../writeColumns';
 
 const kinds = [
   ['tolerance', 'Tolerances (± half-widths)'], ['certificate', 'Certificates (expanded uncertainty)'], ['resolution', 'Resolutions (steps of a display)'], ['repeats', 'Repeats (one row a result)'],
@@ -26,7 +26,7 @@ export function evidenceStep(context: StepContext): Step {
   const { host, say } = context;
   const source = textField('', () => void read(false));
   const kind = choices(kinds, () => void preview());
-  const shape = choices([['rectangular', 'rectangular: all values alike'], ['triangular', 'triangular: the middle more likely'], ['arcsine', 'arcsine: the ends more likely'], ['trapezoidal 0.5', 'trapezoidal, top half as long as the base'], ['normal', 'normal']], () => void preview());
+  const shape = choices([['rectangular', 'rectangular: all values alike'], ['triangular', 'triangular: the middle more likely'], ['arcsine', 'arcsine: the ends more likely'], ['trapezoidal 0.5', 'trapezoidal, top half as long as the base']], () => void preview());
   const coverage = textField('2', () => void preview());
   const full = h('input', { type: 'checkbox', onchange: () => void place() });
   const target = textField();
@@ -34,13 +34,12 @@ export function evidenceStep(context: StepContext): Step {
   const details = h('div', {});
   let area: PortArea | undefined;
   let heading = '';
-  let again = false;
   let format: string | undefined;
 
   const arguments_ = (given: LibraryArgument): LibraryArgument[] => {
     switch (kind.value as Kind) {
-      case 'tolerance': return [given, shape.value === 'normal' ? 'rectangular' : shape.value, full.checked || undefined];
-      case 'certificate': return [given, Number(coverage.value.replace(',', '.')) || undefined, undefined, undefined, full.checked || undefined];
+      case 'tolerance': return [given, shape.value, full.checked || undefined];
+      case 'certificate': return [given, numberIn(coverage), undefined, undefined, full.checked || undefined];
       case 'resolution': return [given, undefined, full.checked || undefined];
       default: return [given, undefined, undefined, undefined, full.checked || undefined];
     }
@@ -63,7 +62,6 @@ export function evidenceStep(context: StepContext): Step {
     if (!area) return;
     const width = full.checked ? 3 : 1;
     target.value = addressOf({ ...area, row: area.row - 1, col: await freeColumn(host.port, area, width), rows: 1, cols: 1 });
-    again = false;
     await preview();
   }
 
@@ -87,8 +85,7 @@ export function evidenceStep(context: StepContext): Step {
     const args = arguments_(area).map((arg) => (typeof arg === 'object' ? addressOf(arg, area!.sheet) : typeof arg === 'string' ? `"${arg}"` : arg === true ? 'TRUE' : (arg ?? '')));
     while (args.at(-1) === '') args.pop();
     const headings = full.checked ? [`u(${heading || 'value'})`, 'degrees of freedom', 'shape'] : [`u(${heading || 'value'})`];
-    const done = await writeColumn(context, { sheet: area.sheet, row: area.row, col: at.col, rows: area.rows, cols: headings.length }, headings, `=ROOTSUM.${names[kind.value as Kind]}(${args.join(',')})`, again, format);
-    again = done === 'asked';
+    await writeColumns(context, { sheet: area.sheet, row: area.row, col: at.col, rows: area.rows }, [{ headings, formula: `=ROOTSUM.${names[kind.value as Kind]}(${args.join(',')})`, numberFormat: format }]);
   }
 
   const element = h('div', {},

@@ -4,9 +4,9 @@ import type { ResultCall } from '../budgetOf';
 import { callLibrary, problemOf } from '../callLibrary';
 import { freeColumn, headingOf } from '../cells';
 import { fill, h } from '../dom';
-import { button, choices, field, figures, table, textField } from '../form';
+import { button, choices, field, figures, numberIn, table, textField, typedArgument } from '../form';
 import type { Step, StepContext } from '../Steps';
-import { writeColumn } from '../writeColumn';
+import { writeColumns } from '../writeColumns';
 
 /** Step 4: results as they stand in a report, and whether they keep a limit. */
 export function reportStep(context: StepContext): Step {
@@ -22,10 +22,8 @@ export function reportStep(context: StepContext): Step {
   const target = textField();
   let found: ResultCall | undefined;
   let stop: () => void = () => undefined;
-  let again = false;
 
-  const number = (input: HTMLInputElement): number | undefined => (input.value.trim() === '' ? undefined : Number(input.value.trim().replace(',', '.')));
-  const factor = (): number | undefined => (style.value === 'brackets' ? undefined : number(k));
+  const factor = (): number | string | undefined => (style.value === 'brackets' ? undefined : numberIn(k));
 
   /** The columns of values and of u, as the call in the sheet has them. */
   const columns = ({ call }: ResultCall): [value: typeof call.at, u: typeof call.at] =>
@@ -42,11 +40,10 @@ export function reportStep(context: StepContext): Step {
     found = call;
     const [values, us] = columns(call).map((a) => ({ ...a, rows: Math.min(5, a.rows) }));
     const texts = await callLibrary(host.port, 'UNC_TEXT', [values, us, style.value, Number(digits.value), unit.value || undefined, factor()]);
-    const limits = number(lower) !== undefined || number(upper) !== undefined;
-    const decisions = limits ? await callLibrary(host.port, 'UNC_DECIDE', [values, us, number(lower), number(upper), rule.value]) : [];
+    const limits = numberIn(lower) !== undefined || numberIn(upper) !== undefined;
+    const decisions = limits ? await callLibrary(host.port, 'UNC_DECIDE', [values, us, numberIn(lower), numberIn(upper), rule.value]) : [];
     fill(view, table('First results', limits ? ['Result', 'Decision'] : ['Result'], texts.map(([t], i) => [problemOf(t) ?? figures(t), ...(limits ? [problemOf(decisions[i]?.[0]) ?? String(decisions[i]?.[0] ?? '')] : [])])));
     if (moved) target.value = addressOf({ ...us, row: us.row - 1, col: await freeColumn(host.port, { ...columns(call)[1] }, 1), rows: 1, cols: 1 });
-    again = false;
   }
 
   async function write(): Promise<void> {
@@ -56,15 +53,14 @@ export function reportStep(context: StepContext): Step {
     const at = areaOf(target.value, us.sheet);
     if (!at || at.sheet !== us.sheet) return say(`Give the cell for the heading as an address on ${us.sheet}`, true);
     const [v, u] = [addressOf(values, us.sheet), addressOf(us, us.sheet)];
-    const text = [v, u, `"${style.value}"`, digits.value, unit.value === '' ? '' : `"${unit.value.replaceAll('"', '""')}"`, factor() ?? ''];
+    const text = [v, u, `"${style.value}"`, digits.value, typedArgument(unit.value || undefined), typedArgument(factor())];
     while (text.at(-1) === '') text.pop();
     const name = await headingOf(host.port, values);
-    const where = { sheet: us.sheet, row: us.row, col: at.col, rows: us.rows, cols: 1 };
-    const done = await writeColumn(context, where, [`${name || 'Result'}, reported`], `=ROOTSUM.UNC_TEXT(${text.join(',')})`, again);
-    again = done === 'asked';
-    if (done !== 'written' || (number(lower) === undefined && number(upper) === undefined)) return;
-    const decision = [v, u, number(lower) ?? '', number(upper) ?? '', `"${rule.value}"`];
-    await writeColumn(context, { ...where, col: at.col + 1, cols: 2 }, ['Decision', 'Rule'], `=ROOTSUM.UNC_DECIDE(${decision.join(',')})`, false);
+    const limits = numberIn(lower) !== undefined || numberIn(upper) !== undefined;
+    await writeColumns(context, { sheet: us.sheet, row: us.row, col: at.col, rows: us.rows }, [
+      { headings: [`${name || 'Result'}, reported`], formula: `=ROOTSUM.UNC_TEXT(${text.join(',')})` },
+      ...(limits ? [{ headings: ['Decision', 'Rule'], formula: `=ROOTSUM.UNC_DECIDE(${[v, u, typedArgument(numberIn(lower)), typedArgument(numberIn(upper)), `"${rule.value}"`].join(',')})` }] : []),
+    ]);
   }
 
   const element = h('div', {},

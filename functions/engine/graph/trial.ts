@@ -79,11 +79,17 @@ export class Trial implements Cells {
   }
 
   rowState(sheet: number, row: number): RowState {
-    return this.graph.rowState(sheet, row);
+    const rows = this.graph.view.hiddenRows(sheet);
+    if (!rows) throw new Unknown();
+    return rows.get(row) ?? 'shown';
   }
 
   formulaAt(sheet: number, row: number, col: number): string | undefined {
-    return this.graph.formulaAt(sheet, row, col);
+    const { rows, cols } = this.graph.view.sheets[sheet];
+    if (row > rows || col > cols) return undefined;
+    const formula = this.graph.view.formula(sheet, row, col);
+    if (formula === undefined) throw new Unknown();
+    return formula ?? undefined;
   }
 
   sheetIndex(name: string): number | undefined {
@@ -99,6 +105,7 @@ export class Trial implements Cells {
   }
 
   spilled(sheet: number, row: number, col: number): Area | undefined {
+    if (this.graph.view.cell(sheet, row, col) === undefined) throw new Unknown();
     return this.graph.spilled(sheet, row, col);
   }
 
